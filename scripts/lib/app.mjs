@@ -26,6 +26,7 @@ export function createLocalServices({ settings, secrets, databases = ['kerfside'
     : createObjectStore({
         dataDir,
         port: Number(settings.KERFSIDE_OBJECT_STORE_PORT),
+        bucket: settings.KERFSIDE_S3_BUCKET,
         accessKeyId: settings.KERFSIDE_S3_ACCESS_KEY_ID,
         secretAccessKey: settings.KERFSIDE_S3_SECRET_ACCESS_KEY,
         region: settings.KERFSIDE_S3_REGION,

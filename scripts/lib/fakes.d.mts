@@ -14,6 +14,8 @@ export interface MailServer extends FakeServer {
 export interface ObjectStoreOptions {
   dataDir: string;
   port: number;
+  /** Made when it is not there. */
+  bucket?: string;
   accessKeyId?: string;
   secretAccessKey?: string;
   region?: string;

@@ -4,15 +4,16 @@ import { projectRoot } from './root.mjs';
 import { createService } from './service.mjs';
 
 /** The object store that speaks S3, not started yet: {url, start, stop, pid, …}. Needs its workspace built. */
-export function createObjectStore({ dataDir, port, accessKeyId, secretAccessKey, region, logFile }) {
+export function createObjectStore({ dataDir, port, bucket, accessKeyId, secretAccessKey, region, logFile }) {
   const url = `http://127.0.0.1:${port}`;
   const service = nodeService({
     title: 'Object store',
     workspace: 'object-store-fake',
     logFile: logFile ?? join(dataDir, 'object-store.log'),
     env: {
-      KERFSIDE_DATA: dataDir,
+      KERFSIDE_OBJECT_STORE_DATA: join(dataDir, 'objects'),
       KERFSIDE_OBJECT_STORE_PORT: String(port),
+      ...(bucket && { KERFSIDE_S3_BUCKET: bucket }),
       ...(accessKeyId && { KERFSIDE_S3_ACCESS_KEY_ID: accessKeyId }),
       ...(secretAccessKey && { KERFSIDE_S3_SECRET_ACCESS_KEY: secretAccessKey }),
       ...(region && { KERFSIDE_S3_REGION: region }),

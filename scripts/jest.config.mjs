@@ -1,0 +1,3 @@
+import { jestPreset } from './jest-preset.mjs';
+
+export default jestPreset({ testMatch: ['<rootDir>/**/*.spec.mjs'] });
