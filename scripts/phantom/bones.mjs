@@ -1,0 +1,170 @@
+// How a bone with an outline, or the edge of a bony surface seen end-on, weakens the beam.
+
+import { add, clamp, smooth, toPlane } from './geometry.mjs';
+import {
+  addSolid, coarse, eachPixel, grain, outlineBox, outlineDistance, planeOutline,
+} from './raster.mjs';
+
+// Above the soft tissue that the bone displaces, per mm, near 60 keV effective.
+export const MU = {
+  muscle: 0.0205,
+  fat: 0.0184,
+  cortex: 0.034,
+  spongy: 0.0092,
+  gas: -0.0203,
+  polyethylene: -0.0012,
+  cement: 0.05,
+  ceramic: 0.13,
+  titanium: 0.14,
+  cobalt: 0.42,
+  steel: 0.4,
+  lead: 1.2,
+};
+
+const fine = grain(11, 0.7, 3.2);
+const broad = grain(12, 2.5, 9);
+const clouds = grain(13, 10, 36, 1);
+
+/** Spongy bone's pattern: streaks along `angle` (radians), mean 1. */
+export function trabeculae(angle = 0, strength = 1) {
+  const c = Math.cos(angle);
+  const s = Math.sin(angle);
+  return (ex, ey) => {
+    const u = ex * c + ey * s;
+    const v = ey * c - ex * s;
+    const streaks = fine(u * 0.42, v) + 0.6 * fine(v * 0.55 + 40, u + 17);
+    return Math.max(0.1, 1 + strength * (0.2 * streaks + 0.14 * broad(ex, ey) + 0.09 * clouds(ex, ey)));
+  };
+}
+
+export const cloudiness = (ex, ey) => clouds(ex, ey);
+export const mottle = (ex, ey) => broad(ex, ey);
+
+const dome = (q) => (q >= 1 ? 1 : q <= 0 ? 0 : Math.sqrt(q * (2 - q)));
+
+/** Thickness field from weighted places [x, y, z, thickness mm, reach mm]. */
+export function thicknessField(camera, places) {
+  const spots = places.map(([x, y, z, t, reach]) => [...toPlane(camera, [x, y, z]), t, 1 / (2 * reach * reach)]);
+  return (ex, ey) => {
+    let sum = 0;
+    let weight = 1e-9;
+    for (const [x, y, t, k] of spots) {
+      const w = Math.exp(-((ex - x) ** 2 + (ey - y) ** 2) * k) + 1e-5;
+      sum += w * t;
+      weight += w;
+    }
+    return sum / weight;
+  };
+}
+
+/**
+ * @typedef {object} Cavity  a round hole in a bone, lined with dense bone
+ * @property {number} x @property {number} y  in the isocentre plane, mm
+ * @property {number} radius @property {number} lining mm @property {number} left share of the bone that stays in front and behind
+ * @property {number=} from @property {number=} to  lining's arc, radians
+ */
+
+function hollowOut(cavities, ex, ey, thickness) {
+  let t = thickness;
+  let lining = 0;
+  for (const c of cavities) {
+    const dx = ex - c.x;
+    const dy = ey - c.y;
+    const r2 = dx * dx + dy * dy;
+    const outer = (c.radius + c.lining) ** 2 - r2;
+    if (outer <= 0) continue;
+    const inner = c.radius * c.radius - r2;
+    const hole = inner > 0 ? 2 * Math.sqrt(inner) : 0;
+    t = Math.max(thickness * c.left, t - hole * (c.depth ?? 1));
+    let turn = Math.atan2(dy, dx) - (c.from ?? -Math.PI);
+    if (turn < 0) turn += 2 * Math.PI;
+    const span = (c.to ?? Math.PI) - (c.from ?? -Math.PI);
+    const arc = span > 6.2 ? 1 : smooth(0, 0.35, turn) * smooth(0, 0.35, span - turn);
+    lining += arc * (2 * Math.sqrt(outer) - hole) * (c.weight ?? 1);
+  }
+  return [t, lining];
+}
+
+// A flat bone seen from the side shows its substance on a smaller field.
+const area = (outline) =>
+  Math.abs(outline.reduce((sum, p, i) => {
+    const q = outline[(i + 1) % outline.length];
+    return sum + p[0] * q[1] - q[0] * p[1];
+  }, 0)) / 2;
+
+/**
+ * Adds a bone given by outlines whose vertices are [x, y, z, cortex mm, edge radius mm].
+ * @param {object} bone outlines, thickness(ex, ey), plate (cortex in front and behind, mm),
+ *   cavities, pattern(ex, ey), clip(ex, ey) signed mm, density
+ */
+export function addBone(sheet, bone) {
+  const outlines = bone.outlines.map((o) => planeOutline(sheet.camera, o));
+  const distance = outlineDistance(outlines);
+  const packed = clamp(area(bone.outlines[0]) / area(outlines[0]), 0.8, 2.4);
+  const pattern = bone.pattern ?? trabeculae();
+  const { plate = 1, density = 1, cavities = [], clip } = bone;
+  const out = new Float64Array(3);
+  const grid = coarse(sheet, outlineBox(outlines[0], 1), clip ? 5 : 4, (ex, ey, to) => {
+    distance(ex, ey, out);
+    to[0] = out[0];
+    to[1] = out[1];
+    to[2] = out[2];
+    to[3] = bone.thickness(ex, ey, out[2]);
+    if (clip) to[4] = clip(ex, ey);
+  });
+  eachPixel(sheet, grid, (k, ex, ey, [d, cortex, edge, thick, side]) => {
+    if (d <= 0) return;
+    const cut = clip ? smooth(-0.15, 0.15, side) : 1;
+    if (cut === 0) return;
+    const [t, lining] = hollowOut(cavities, ex, ey, thick);
+    const outer = t * dome(d / edge);
+    const core = Math.max(0, t - 2 * plate) * dome((d - cortex) / Math.max(0.5, edge - cortex));
+    const inner = Math.min(core, outer);
+    const shell = outer - inner + Math.min(lining, 14) * smooth(0, 3, d);
+    sheet.tissue[k] += cut * density * packed * (MU.cortex * shell + MU.spongy * inner * pattern(ex, ey));
+  });
+}
+
+/**
+ * Adds the bright line of a cortical surface that the beam grazes.
+ * @param {number[][]} points [x, y, z, weight]
+ * @param {number} side +1 when the bone lies to the left of the line's direction, -1 to the right
+ * @param {{bend?: number, cortex?: number, mu?: number, reach?: number}} surface bend radius and thickness, mm
+ */
+export function addRidge(sheet, points, side, surface = {}) {
+  const { bend = 12, cortex = 1, mu = MU.cortex, reach = 7 } = surface;
+  const line = planeOutline(sheet.camera, points);
+  const grid = coarse(sheet, outlineBox(line, reach), 2, (ex, ey, out) => {
+    let best = 1e12;
+    for (let i = 0; i + 1 < line.length; i++) {
+      const [x, y, w] = line[i];
+      const dx = line[i + 1][0] - x;
+      const dy = line[i + 1][1] - y;
+      const t = clamp(((ex - x) * dx + (ey - y) * dy) / (dx * dx + dy * dy || 1e-9), 0, 1);
+      const rx = ex - x - t * dx;
+      const ry = ey - y - t * dy;
+      const r = rx * rx + ry * ry;
+      if (r >= best) continue;
+      best = r;
+      out[0] = Math.sqrt(r) * (dx * ry - dy * rx >= 0 ? side : -side);
+      out[1] = w + t * (line[i + 1][2] - w);
+    }
+  });
+  eachPixel(sheet, grid, (k, ex, ey, [d, weight]) => {
+    if (d <= 0 || d > reach) return;
+    const outer = Math.sqrt(Math.max(0, 2 * bend * d - d * d));
+    const e = d - cortex;
+    const r = bend - cortex;
+    const inner = e > 0 ? Math.sqrt(Math.max(0, 2 * r * e - e * e)) : 0;
+    sheet.tissue[k] += mu * weight * 2 * (outer - inner) * smooth(reach, reach * 0.4, d);
+  });
+}
+
+/** Cloudy radiolucent or dense spot inside a bone. */
+export function addSpot(sheet, solid, mu, roughness = 0.3) {
+  addSolid(sheet, solid, mu, 'tissue', (ex, ey) => clamp(1 + roughness * broad(ex + 31, ey - 12), 0.1, 2));
+}
+
+/** Points mirrored to a side and shifted. */
+export const place = (points, sideSign, at = [0, 0, 0]) =>
+  points.map(([x, y, z, ...rest]) => [...add([x * sideSign, y, z], at), ...rest]);

@@ -1,0 +1,154 @@
+// What the detector and its processing make of the attenuation: scatter, blur, quantum noise,
+// logarithm, evening out of large differences, edge emphasis, twelve bits.
+
+import { clamp, seededRandom } from './geometry.mjs';
+
+/** Running mean along rows, written transposed. */
+function boxTransposed(data, width, height, radius) {
+  const out = new Float32Array(data.length);
+  const n = 2 * radius + 1;
+  for (let y = 0; y < height; y++) {
+    const row = y * width;
+    let sum = data[row] * (radius + 1);
+    for (let k = 1; k <= radius; k++) sum += data[row + Math.min(k, width - 1)];
+    for (let x = 0; x < width; x++) {
+      out[x * height + y] = sum / n;
+      sum += data[row + Math.min(x + radius + 1, width - 1)] - data[row + Math.max(x - radius, 0)];
+    }
+  }
+  return out;
+}
+
+/** Nearly Gaussian blur by repeated running means. */
+export function blur(data, width, height, radius, times = 2) {
+  let out = data;
+  for (let i = 0; i < times; i++) {
+    out = boxTransposed(boxTransposed(out, width, height, radius), height, width, radius);
+  }
+  return out;
+}
+
+const CELL = 8;
+
+function shrink(data, width, height) {
+  const w = Math.ceil(width / CELL);
+  const h = Math.ceil(height / CELL);
+  const out = new Float32Array(w * h);
+  for (let j = 0; j < h; j++) {
+    for (let i = 0; i < w; i++) {
+      let sum = 0;
+      let count = 0;
+      for (let y = j * CELL; y < Math.min(height, (j + 1) * CELL); y += 2) {
+        for (let x = i * CELL; x < Math.min(width, (i + 1) * CELL); x += 2) {
+          sum += data[y * width + x];
+          count++;
+        }
+      }
+      out[j * w + i] = sum / count;
+    }
+  }
+  return { w, h, data: out };
+}
+
+/** Bilinear reading of a shrunken field. */
+function reader({ w, h, data }) {
+  return (x, y) => {
+    const u = clamp((x - 3) / CELL, 0, w - 1.001);
+    const v = clamp((y - 3) / CELL, 0, h - 1.001);
+    const i = Math.floor(u);
+    const j = Math.floor(v);
+    const k = j * w + i;
+    const top = data[k] + (data[k + 1] - data[k]) * (u - i);
+    const low = data[k + w] + (data[k + w + 1] - data[k + w]) * (u - i);
+    return top + (low - top) * (v - j);
+  };
+}
+
+function bellTable(seed) {
+  const random = seededRandom(seed);
+  return Float32Array.from({ length: 65536 }, () => {
+    const r = Math.sqrt(-2 * Math.log(1 - random()));
+    return r * Math.cos(2 * Math.PI * random());
+  });
+}
+
+/** Signal with scatter and quantum noise, as -ln. */
+function detect(sheet, spec) {
+  const { width, height, tissue, metal } = sheet;
+  const { scatter = 0.16, quanta = 5200 } = spec.exposure;
+  const n = width * height;
+  const primary = new Float32Array(n);
+  for (let i = 0; i < n; i++) primary[i] = Math.exp(-tissue[i] - metal[i]);
+  const sharp = blur(primary, width, height, 1, 1);
+  for (let i = 0; i < n; i++) sharp[i] = 0.45 * primary[i] + 0.55 * sharp[i];
+  const small = shrink(primary, width, height);
+  for (let i = 0; i < small.data.length; i++) small.data[i] = Math.min(small.data[i], 0.09);
+  const haze = reader({ ...small, data: blur(small.data, small.w, small.h, 14) });
+  const bell = bellTable(spec.seed * 31 + 7);
+  const pick = seededRandom(spec.seed * 131 + 5);
+  const out = new Float32Array(n);
+  for (let y = 0; y < height; y++) {
+    for (let x = 0; x < width; x++) {
+      const i = y * width + x;
+      const signal = sharp[i] + scatter * haze(x, y) + 2e-4;
+      const noise = bell[(pick() * 65536) | 0] / Math.sqrt(quanta * signal * 60);
+      out[i] = -Math.log(signal * Math.max(0.2, 1 + noise));
+    }
+  }
+  return out;
+}
+
+function levels(values) {
+  const bins = new Uint32Array(4096);
+  for (let i = 0; i < values.length; i += 7) bins[clamp(Math.floor(values[i] * 256), 0, 4095)]++;
+  const total = bins.reduce((a, b) => a + b, 0);
+  return (share) => {
+    let sum = 0;
+    for (let i = 0; i < bins.length; i++) {
+      sum += bins[i];
+      if (sum >= share * total) return i / 256;
+    }
+    return 16;
+  };
+}
+
+/** Blackens what lies outside the collimator's opening, mm from the film's edge. */
+function collimate(pixels, spec) {
+  const { width, height, pixelSpacingMm, collimationMm = 4 } = spec;
+  const edge = collimationMm / pixelSpacingMm;
+  for (let y = 0; y < height; y++) {
+    for (let x = 0; x < width; x++) {
+      const d = Math.min(x, y, width - 1 - x, height - 1 - y) - edge;
+      if (d < 3) pixels[y * width + x] *= d < 0 ? 0 : (d + 1) / 4;
+    }
+  }
+}
+
+/** @returns {Uint16Array} 12-bit pixels, bright where the beam was weakened */
+export function expose(sheet, spec) {
+  const { width, height } = sheet;
+  const film = detect(sheet, spec);
+  const { even = 0.62, emphasis = 0.55 } = spec.exposure;
+  const calm = Float32Array.from(sheet.tissue, (v) => clamp(v, 1.2, 6));
+  const small = shrink(calm, width, height);
+  const base = reader({ ...small, data: blur(small.data, small.w, small.h, 9) });
+  const soft = blur(film, width, height, 4);
+  const middle = small.data.reduce((a, b) => a + b, 0) / small.data.length;
+  for (let y = 0; y < height; y++) {
+    for (let x = 0; x < width; x++) {
+      const i = y * width + x;
+      film[i] += emphasis * (film[i] - soft[i]) - even * (base(x, y) - middle) + 2;
+    }
+  }
+  const share = levels(film);
+  const low = share(0.3) - 1.05;
+  const high = share(0.3) + 1.5;
+  const pixels = new Uint16Array(width * height);
+  for (let i = 0; i < pixels.length; i++) {
+    const v = (film[i] - low) / (high - low);
+    const bent = v < 0.75 ? v : 0.75 + 0.25 * Math.tanh((v - 0.75) / 0.25);
+    pixels[i] = clamp(Math.round(4095 * clamp(bent, 0, 1) ** 1.25), 0, 4095);
+  }
+  collimate(pixels, spec);
+  return pixels;
+}

@@ -1,0 +1,197 @@
+// Adds up attenuation on the film's grid: closed-form solids pixel by pixel, and bones given by an
+// outline, whose chord follows from the distance to the outline.
+
+import { clamp, seededRandom, toPlane } from './geometry.mjs';
+
+const STEP = 2;
+const TILE = 512;
+
+/** @typedef {{camera: object, width: number, height: number, tissue: Float32Array, metal: Float32Array}} Sheet */
+
+/** @returns {Sheet} */
+export function makeSheet(camera) {
+  const { width, height } = camera;
+  return {
+    camera,
+    width,
+    height,
+    tissue: new Float32Array(width * height),
+    metal: new Float32Array(width * height),
+  };
+}
+
+const columns = (sheet, box) => {
+  const { camera, width, height } = sheet;
+  return [
+    clamp(Math.floor(camera.cx + box[0] / camera.pitch), 0, width),
+    clamp(Math.ceil(camera.cx + box[1] / camera.pitch) + 1, 0, width),
+    clamp(Math.floor(camera.cy - box[3] / camera.pitch), 0, height),
+    clamp(Math.ceil(camera.cy - box[2] / camera.pitch) + 1, 0, height),
+  ];
+};
+
+/**
+ * Adds a solid's attenuation.
+ * @param {number} mu per mm; negative takes away what the solid displaces
+ * @param {'tissue'|'metal'} layer
+ * @param {((ex: number, ey: number) => number)=} shade factor on the chord
+ */
+export function addSolid(sheet, solid, mu, layer = 'tissue', shade) {
+  const { camera, width } = sheet;
+  const target = sheet[layer];
+  const [x0, x1, y0, y1] = columns(sheet, solid.box);
+  for (let y = y0; y < y1; y++) {
+    const ey = (camera.cy - y) * camera.pitch;
+    for (let x = x0; x < x1; x++) {
+      const ex = (x - camera.cx) * camera.pitch;
+      const chord = solid.chord(ex, ey);
+      if (chord > 0) target[y * width + x] += mu * (shade ? chord * shade(ex, ey) : chord);
+    }
+  }
+}
+
+/** Grid of every second pixel with bilinear reading, for what changes slowly. */
+export function coarse(sheet, box, channels, fill) {
+  const { camera } = sheet;
+  const [x0, x1, y0, y1] = columns(sheet, box);
+  const w = Math.ceil((x1 - x0) / STEP) + 2;
+  const h = Math.ceil((y1 - y0) / STEP) + 2;
+  const data = Array.from({ length: channels }, () => new Float32Array(w * h));
+  const out = new Float64Array(channels);
+  for (let j = 0; j < h; j++) {
+    for (let i = 0; i < w; i++) {
+      fill((x0 + i * STEP - camera.cx) * camera.pitch, (camera.cy - y0 - j * STEP) * camera.pitch, out);
+      for (let c = 0; c < channels; c++) data[c][j * w + i] = out[c];
+    }
+  }
+  return { x0, x1, y0, y1, w, h, data };
+}
+
+/** Calls `visit(pixelIndex, ex, ey, values)` for all pixels of a coarse grid. */
+export function eachPixel(sheet, grid, visit) {
+  const { camera, width } = sheet;
+  const values = new Float64Array(grid.data.length);
+  for (let y = grid.y0; y < grid.y1; y++) {
+    const v = (y - grid.y0) / STEP;
+    const j = Math.floor(v);
+    const fv = v - j;
+    for (let x = grid.x0; x < grid.x1; x++) {
+      const u = (x - grid.x0) / STEP;
+      const i = Math.floor(u);
+      const fu = u - i;
+      const k = j * grid.w + i;
+      for (let c = 0; c < values.length; c++) {
+        const d = grid.data[c];
+        const top = d[k] + (d[k + 1] - d[k]) * fu;
+        const low = d[k + grid.w] + (d[k + grid.w + 1] - d[k + grid.w]) * fu;
+        values[c] = top + (low - top) * fv;
+      }
+      visit(y * width + x, (x - camera.cx) * camera.pitch, (camera.cy - y) * camera.pitch, values);
+    }
+  }
+}
+
+/** Outline in the isocentre plane: flat arrays, attributes per vertex carried along. */
+export function planeOutline(camera, points) {
+  return points.map(([x, y, z, ...rest]) => [...toPlane(camera, [x, y, z]), ...rest]);
+}
+
+export function outlineBox(outline, margin = 0) {
+  const xs = outline.map((p) => p[0]);
+  const ys = outline.map((p) => p[1]);
+  return [
+    Math.min(...xs) - margin, Math.max(...xs) + margin,
+    Math.min(...ys) - margin, Math.max(...ys) + margin,
+  ];
+}
+
+/**
+ * Distance (mm, positive inside) to closed outlines, even-odd, with two attributes of the nearest
+ * place on them. @returns {(ex: number, ey: number, out: Float64Array) => void}
+ */
+export function outlineDistance(outlines) {
+  const segs = outlines.flatMap((o) => o.map((p, i) => [p, o[(i + 1) % o.length]]));
+  const n = segs.length;
+  const f = new Float64Array(n * 9);
+  segs.forEach(([p, q], i) => {
+    const dx = q[0] - p[0];
+    const dy = q[1] - p[1];
+    f.set([p[0], p[1], dx, dy, 1 / (dx * dx + dy * dy || 1e-9), p[2], q[2] - p[2], p[3], q[3] - p[3]], i * 9);
+  });
+  return (ex, ey, out) => {
+    let best = 1e12;
+    let at = 0;
+    let where = 0;
+    let inside = false;
+    for (let k = 0; k < n * 9; k += 9) {
+      const ox = ex - f[k];
+      const oy = ey - f[k + 1];
+      const dx = f[k + 2];
+      const dy = f[k + 3];
+      let t = (ox * dx + oy * dy) * f[k + 4];
+      t = t < 0 ? 0 : t > 1 ? 1 : t;
+      const rx = ox - t * dx;
+      const ry = oy - t * dy;
+      const r = rx * rx + ry * ry;
+      if (r < best) {
+        best = r;
+        at = k;
+        where = t;
+      }
+      if (oy < 0 !== oy - dy < 0 && ox < (oy / dy) * dx) inside = !inside;
+    }
+    out[0] = inside ? Math.sqrt(best) : -Math.sqrt(best);
+    out[1] = f[at + 5] + where * f[at + 6];
+    out[2] = f[at + 7] + where * f[at + 8];
+  };
+}
+
+const blur = (data, size, radius) => {
+  const out = new Float32Array(data.length);
+  for (let y = 0; y < size; y++) {
+    for (let x = 0; x < size; x++) {
+      let sum = 0;
+      for (let k = -radius; k <= radius; k++) sum += data[y * size + ((x + k + size) % size)];
+      out[x * size + y] = sum / (2 * radius + 1);
+    }
+  }
+  return out;
+};
+
+const blurBoth = (data, radius, times) => {
+  let out = data;
+  for (let i = 0; i < times; i++) out = blur(blur(out, TILE, radius), TILE, radius);
+  return out;
+};
+
+/**
+ * Band of noise that repeats without a seam, mean 0 and standard deviation 1.
+ * @returns {(u: number, v: number) => number} u and v in mm
+ */
+export function grain(seed, fineMm, coarseMm, cellMm = 0.25) {
+  const random = seededRandom(seed);
+  const white = Float32Array.from({ length: TILE * TILE }, () => random() - 0.5);
+  const fine = blurBoth(white, Math.max(1, Math.round(fineMm / cellMm / 2)), 2);
+  const wide = blurBoth(white, Math.max(2, Math.round(coarseMm / cellMm / 2)), 2);
+  let sum = 0;
+  for (let i = 0; i < fine.length; i++) {
+    fine[i] -= wide[i];
+    sum += fine[i] * fine[i];
+  }
+  const k = 1 / Math.sqrt(sum / fine.length);
+  return (u, v) => {
+    const fx = u / cellMm;
+    const fy = v / cellMm;
+    const ix = Math.floor(fx);
+    const iy = Math.floor(fy);
+    const x = fx - ix;
+    const y = fy - iy;
+    const a = (iy & (TILE - 1)) * TILE;
+    const b = ((iy + 1) & (TILE - 1)) * TILE;
+    const p = ix & (TILE - 1);
+    const q = (ix + 1) & (TILE - 1);
+    const top = fine[a + p] + (fine[a + q] - fine[a + p]) * x;
+    const low = fine[b + p] + (fine[b + q] - fine[b + p]) * x;
+    return k * (top + (low - top) * y);
+  };
+}

@@ -1,0 +1,70 @@
+// Spec in, radiograph and truth out.
+
+import { addBody, addHemipelvis, addSpine, HIP, socket } from './anatomy.mjs';
+import { expose } from './exposure.mjs';
+import { addFemur } from './femur.mjs';
+import { addCup, addHead, addStem } from './implants.mjs';
+import { addLateral } from './lateral.mjs';
+import { burnIn, leadMarker } from './letters.mjs';
+import { makeSheet } from './raster.mjs';
+import { completeSpec, layOut, truthOf } from './scene.mjs';
+import { toPlane } from './geometry.mjs';
+
+/** Sockets, lysis and old beds as cavities of the operated half of the pelvis. */
+function cavitiesOf(spec, scene) {
+  const { shell, bone } = spec;
+  const { camera, sideSign, cup } = scene;
+  const bed = shell.outerMm / 2 + (shell.kind === 'cemented' ? (shell.cementMm ?? 4) : 0);
+  const gap = shell.lucencyMm ?? 0;
+  const main = socket(camera, sideSign, cup, bed - 0.4 + gap, {
+    lining: gap ? 1.5 : 0.7,
+    weight: gap ? 0.8 : 0.45,
+    depth: gap ? 1.5 : 1,
+    left: gap ? 0.22 : 0.3,
+  });
+  return [main, ...bone.cavities.map((c) => boneCavity(camera, sideSign, c))];
+}
+
+/** Cavity given by place lateral of the midline and above the teardrop line. */
+function boneCavity(camera, sideSign, c) {
+  const [x, y] = toPlane(camera, [sideSign * c.atMm[0], c.atMm[1], 0]);
+  return { x, y, radius: c.radiusMm, lining: c.liningMm ?? 0.7, left: c.left ?? 0.35, depth: c.depth ?? 1.2, weight: 0.6 };
+}
+
+function drawPelvis(sheet, spec, scene) {
+  const { camera, sideSign, femur } = scene;
+  const { density } = spec.bone;
+  addBody(sheet, { ...spec.body, seed: spec.seed });
+  addSpine(sheet, density);
+  const native = socket(camera, -sideSign, [-sideSign * HIP.x, HIP.y, 0], HIP.head + 3.2);
+  addHemipelvis(sheet, -sideSign, { density, cavities: [native] });
+  addHemipelvis(sheet, sideSign, { ...spec.bone, cavities: cavitiesOf(spec, scene) });
+  addFemur(sheet, { frame: femur.other, density, seed: spec.seed + 1 });
+  const lysis = (spec.femurCavities ?? []).map((c) => {
+    const [x, y] = toPlane(camera, femur.bone.toPatient([...c.atMm, 0]));
+    return { x, y, radius: c.radiusMm, lining: 0.6, left: 0.4, depth: 1.1, weight: 0.6 };
+  });
+  addFemur(sheet, { frame: femur.bone, operated: true, density, seed: spec.seed, fracture: spec.femurFracture, cavities: lysis });
+}
+
+/**
+ * Draws one radiograph.
+ * @param {object} input see `completeSpec` for what can be left out
+ * @returns {{width: number, height: number, pixels: Uint16Array, truth: object, spec: object}}
+ *   12-bit pixels, MONOCHROME2
+ */
+export function drawRadiograph(input) {
+  const spec = completeSpec(input);
+  const scene = layOut(spec);
+  const sheet = makeSheet(scene.camera);
+  if (spec.projection === 'lateral') addLateral(sheet, spec, scene);
+  else drawPelvis(sheet, spec, scene);
+  addCup(sheet, spec, scene.cup, scene.opening, scene.screws);
+  const { tip } = addStem(sheet, spec, scene.femur.stem, scene.broken);
+  addHead(sheet, spec.head, scene.headCentre);
+  leadMarker(sheet, spec);
+  const pixels = expose(sheet, spec);
+  const truth = { ...truthOf(spec, scene), burnedIn: burnIn(pixels, spec) };
+  truth.stemTipMm = tip;
+  return { width: spec.width, height: spec.height, pixels, truth, spec };
+}
