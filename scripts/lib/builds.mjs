@@ -14,16 +14,18 @@ export const BUILDS = [
 ];
 
 const COMMON = ['package-lock.json', 'tsconfig.base.json'];
-const IGNORED = new Set(['node_modules', 'dist', 'test', 'e2e', 'docs', 'coverage', 'screenshots', '.cache']);
+const IGNORED = new Set(['node_modules', 'dist', 'coverage', 'screenshots', '.cache']);
+const IGNORED_AT_THE_TOP = new Set(['test', 'e2e', 'docs', 'README.md', 'jest.config.mjs', 'jest.e2e.config.mjs']);
 
 /** A hash of everything that a workspace's build depends on. */
 export function sourceHash(root, { workspace, also = [] }) {
   const hash = createHash('sha256').update(process.version);
-  for (const path of [...COMMON, workspace, ...also]) addToHash(hash, root, path);
+  for (const path of [...COMMON, ...also]) addToHash(hash, root, path);
+  addToHash(hash, root, workspace, IGNORED_AT_THE_TOP);
   return hash.digest('hex');
 }
 
-function addToHash(hash, root, path) {
+function addToHash(hash, root, path, alsoIgnored = new Set()) {
   const full = join(root, path);
   if (!existsSync(full)) return;
   if (!statSync(full).isDirectory()) {
@@ -31,7 +33,7 @@ function addToHash(hash, root, path) {
     return;
   }
   for (const name of readdirSync(full).sort()) {
-    if (IGNORED.has(name) || /[.-]spec\.tsx?$/.test(name)) continue;
+    if (IGNORED.has(name) || alsoIgnored.has(name) || /[.-]spec\.tsx?$/.test(name)) continue;
     addToHash(hash, root, `${path}/${name}`);
   }
 }

@@ -9,11 +9,12 @@ const LOG_LIMIT = 5 * 1024 * 1024;
  * Starts a long-running child in a process group of its own (a Ctrl-C reaches the parent alone, which
  * then stops all in order). On Linux the kernel ends it when the parent is killed outright.
  */
-export function spawnService({ file, args, cwd, env, logFile }) {
-  const log = openLog(logFile);
+export function spawnService({ file, args, cwd, env, logFile, toTerminal = false }) {
   const [command, commandArgs] = existsSync(SETPRIV)
     ? [SETPRIV, ['--pdeathsig', 'TERM', '--', file, ...args]]
     : [file, args];
+  if (toTerminal) return spawn(command, commandArgs, { cwd, env, detached: true, stdio: ['ignore', 'inherit', 'inherit'] });
+  const log = openLog(logFile);
   const child = spawn(command, commandArgs, { cwd, env, detached: true, stdio: ['ignore', log, log] });
   closeSync(log);
   return child;

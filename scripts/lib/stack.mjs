@@ -1,0 +1,74 @@
+import { apiEnvironment, createLocalServices, wantedPorts } from './app.mjs';
+import { BUILDS, buildWorkspace, isBuilt } from './builds.mjs';
+import { checkNodeVersion, installMissing } from './install.mjs';
+import { checkPortsFree } from './ports.mjs';
+import { createRunningFile } from './running.mjs';
+import { readSecrets } from './secrets.mjs';
+import { readSettings } from './settings.mjs';
+import { step } from './steps.mjs';
+import { createSupervisor } from './supervisor.mjs';
+
+/**
+ * What `npm start` and `npm run dev` have in common, up to the local services running: checks first,
+ * then what is missing, then the builds of `workspaces`. Answers what the rest needs.
+ */
+export async function bringUpStack({ root, lifecycle, workspaces }) {
+  checkNodeVersion();
+  const settings = readSettings(root);
+  const running = createRunningFile(settings.KERFSIDE_DATA);
+  const check = async () => {
+    await checkPortsFree(wantedPorts(settings));
+    running.checkUnused();
+  };
+  const left = await running.clearLeftovers();
+  if (left.length > 0) process.stdout.write(`Ended ${left.length} processes that an earlier start had left.\n`);
+  await check();
+
+  await installMissing(root, settings.KERFSIDE_DB_URL ? 'run-without-database' : 'run');
+  lifecycle.check();
+  await build({ root, lifecycle, settings, workspaces });
+
+  const secrets = readSecrets(settings.KERFSIDE_DATA);
+  const services = createLocalServices({ settings, secrets });
+  // Installing and building can take minutes in which another program may have come.
+  await check();
+  const startService = await supervise({ lifecycle, running });
+  for (const service of [services.database, services.store, services.mail]) if (service) await startService(service);
+  return { settings, services, env: apiEnvironment({ settings, secrets, services }), startService };
+}
+
+async function build({ root, lifecycle, settings, workspaces }) {
+  const needed = BUILDS.filter(
+    ({ workspace }) =>
+      workspaces.includes(workspace) &&
+      !(workspace === 'object-store-fake' && settings.KERFSIDE_S3_ENDPOINT) &&
+      !(workspace === 'mail-fake' && settings.KERFSIDE_SMTP_URL),
+  );
+  for (const each of needed) {
+    if (isBuilt(root, each)) continue;
+    await step(`Building ${each.workspace}`, async () => {
+      await buildWorkspace(root, each);
+    });
+    lifecycle.check();
+  }
+}
+
+/** Answers a function that starts a service, keeps it going from then on, and ends it with the rest. */
+async function supervise({ lifecycle, running }) {
+  const services = [];
+  const writeRunning = () => running.write(services.map((service) => service.pid));
+  const supervisor = createSupervisor({ say: (line) => process.stdout.write(`${line}\n`), onChange: writeRunning });
+  await lifecycle.onStop(() => running.remove());
+  await lifecycle.onStop(() => supervisor.stop());
+  return async (service) => {
+    lifecycle.check();
+    services.push(service);
+    supervisor.add(service);
+    await step(service.title, async () => {
+      await service.start();
+    });
+    supervisor.watch(service);
+    writeRunning();
+    lifecycle.check();
+  };
+}
