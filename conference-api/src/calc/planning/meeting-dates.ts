@@ -39,6 +39,8 @@ const HORIZON: Record<Frequency, { unit: 'days' | 'weeks' | 'months' | 'years'; 
   MONTHLY: { unit: 'months', periods: 6_000 },
   YEARLY: { unit: 'years', periods: 1_000 },
 };
+const EVERY_MONTH = [1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11, 12];
+const MOST_DAYS: Record<Frequency, number> = { DAILY: 1, WEEKLY: 7, MONTHLY: 31, YEARLY: 366 };
 const LAST_DAY = Temporal.PlainDateTime.from('9999-12-31T23:59:59');
 
 /**
@@ -114,6 +116,7 @@ function toInstant(wall: Temporal.PlainDateTime, timeZone: string): number {
  */
 function generate(rule: RecurrenceRule, start: Temporal.PlainDateTime, timeZone: string, wanted: number) {
   const instants = new Set<number>();
+  if (positionsOutOfReach(rule)) return { instants: [], ended: true };
   const until = rule.until ?? Infinity;
   let ended = rule.until !== null;
   let seen = 0;
@@ -140,7 +143,8 @@ function libraryOptions(rule: RecurrenceRule, start: Temporal.PlainDateTime) {
     byDay: rule.byDay,
     byHour: rule.byHour,
     byMinute: rule.byMinute,
-    byMonth: rule.byMonth,
+    // In a yearly rule the library narrows BYMONTHDAY by weekday only if months are named.
+    byMonth: rule.byMonth ?? (rule.freq === 'YEARLY' && rule.byMonthDay && rule.byDay ? EVERY_MONTH : null),
     byMonthDay: rule.byMonthDay,
     byYearDay: rule.byYearDay,
     byWeekNo: rule.byWeekNo,
@@ -164,4 +168,12 @@ function lastWallTime(start: Temporal.PlainDateTime, unit: string, periods: numb
   } catch {
     return LAST_DAY; // Beyond what the calendar can hold.
   }
+}
+
+/** Whether BYSETPOS asks for more instances than a period can hold; the library would search long. */
+function positionsOutOfReach({ freq, byDay, byHour, byMinute, bySetPos }: RecurrenceRule): boolean {
+  if (bySetPos === null) return false;
+  const days = freq === 'WEEKLY' ? (byDay?.length ?? 1) : MOST_DAYS[freq];
+  const most = days * (byHour?.length ?? 1) * (byMinute?.length ?? 1);
+  return bySetPos.every((position) => Math.abs(position) > most);
 }

@@ -78,6 +78,7 @@ export function parseRule(text: string): RecurrenceRule {
     bySetPos: readList(parts, 'BYSETPOS'),
   };
   refuseTooOften(rule, readList(parts, 'BYSECOND'));
+  refuseUnsettled(rule);
   return rule;
 }
 
@@ -187,4 +188,16 @@ function refuseTooOften({ byHour, byMinute }: RecurrenceRule, bySecond: number[]
   const hours = byHour?.length ?? 1;
   const times = hours * (byMinute?.length ?? 1);
   if (hours === 24 || times > MOST_TIMES_A_DAY) throw tooOften();
+}
+
+/**
+ * Days counted within the year (BYYEARDAY, or BYMONTHDAY with a numbered BYDAY) and narrowed
+ * by weekday: libraries disagree on these, so a wrong date is worse than a refusal.
+ */
+function refuseUnsettled({ freq, byDay, byMonthDay, byYearDay }: RecurrenceRule): void {
+  if (freq !== 'YEARLY' || byDay === null) return;
+  const numbered = byDay.some((day) => day.length > 2);
+  if (byYearDay !== null || (byMonthDay !== null && numbered)) {
+    throw bad('BYDAY beside BYYEARDAY, or numbered beside BYMONTHDAY, is not supported in a yearly rule.', 'unsupported');
+  }
 }

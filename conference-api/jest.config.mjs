@@ -1,0 +1,8 @@
+import { jestPreset } from '../scripts/jest-preset.mjs';
+
+export default {
+  projects: [
+    jestPreset({ displayName: 'unit', testMatch: ['<rootDir>/src/**/*.spec.ts'] }),
+    jestPreset({ displayName: 'e2e', testMatch: ['<rootDir>/test/**/*.e2e-spec.ts'] }),
+  ],
+};

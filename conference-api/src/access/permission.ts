@@ -1,0 +1,32 @@
+/** Everything that can be allowed. A route declares one; `role-permissions.ts` says who holds it. */
+export enum Permission {
+  // of a member, in a conference
+  ConferenceRead = 'conference.read',
+  CaseRead = 'case.read',
+  CaseCreate = 'case.create',
+  CaseWrite = 'case.write',
+  CaseCheck = 'case.check',
+  CaseWithdraw = 'case.withdraw',
+  CaseAudit = 'case.audit',
+  ImageWrite = 'image.write',
+  RemarkWrite = 'remark.write',
+  QuestionAnswer = 'question.answer',
+  Rate = 'rating.give',
+  RatingRead = 'rating.read',
+  RoundControl = 'round.control',
+  AgendaRead = 'agenda.read',
+  AgendaWrite = 'agenda.write',
+  AttendanceWrite = 'attendance.write',
+  MeetingRun = 'meeting.run',
+  DecisionRead = 'decision.read',
+  DecisionWrite = 'decision.write',
+  FinalDecisionWrite = 'final-decision.write',
+  OutcomeWrite = 'outcome.write',
+  ConferenceSettings = 'conference.settings',
+  // of the administrator, on the whole site
+  PeopleManage = 'people.manage',
+  UnitsManage = 'units.manage',
+  ConferencesManage = 'conferences.manage',
+  AuditRead = 'audit.read',
+  MailQueue = 'mail.queue',
+}

@@ -1,0 +1,73 @@
+import 'reflect-metadata';
+import { readdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { join } from 'node:path';
+import { DataSource } from 'typeorm';
+import { readSettings, withEnvFile } from '../config/settings.js';
+import { dataSourceOptions } from './data-source.js';
+
+/*
+ * Writes one migration for each statement that the entities ask for and the database lacks.
+ * One statement each, since MariaDB commits at DDL: a migration that fails has done nothing.
+ * Run it on a database on which all migrations have run; read and rename what it writes.
+ */
+const folder = join(process.cwd(), 'src/database/migrations');
+const settings = readSettings(withEnvFile(process.env, '.env'));
+const dataSource = await new DataSource(dataSourceOptions(settings.databaseUrl)).initialize();
+
+/** A sentence for a statement: CreateTheTableCases, TieBallotsToPeople. */
+function sentence(statement: string): string {
+  const pascal = (text: string) => text.replace(/(^|_)([a-z])/g, (_, __, letter: string) => letter.toUpperCase());
+  const table = pascal(/(?:TABLE|ON|INTO) `([^`]+)`/.exec(statement)?.[1] ?? 'Unknown');
+  const column = pascal(/(?:ADD|DROP COLUMN|CHANGE) `([^`]+)`/.exec(statement)?.[1] ?? '');
+  const target = pascal(/REFERENCES `([^`]+)`/.exec(statement)?.[1] ?? '');
+  const key = pascal(/FOREIGN KEY \(`([^`]+)`\)/.exec(statement)?.[1] ?? '');
+  if (/^CREATE TABLE/.test(statement)) return `CreateTheTable${table}`;
+  if (/^DROP TABLE/.test(statement)) return `DropTheTable${table}`;
+  if (target) return `Tie${table}To${target}By${key}`;
+  if (/INDEX/.test(statement)) return `Index${table}`;
+  if (column) return `Change${column}Of${table}`;
+  return `Change${table}`;
+}
+
+const kebab = (text: string) => text.replace(/([a-z0-9])([A-Z])/g, '$1-$2').toLowerCase();
+const literal = (text: string) => `\`${text.replace(/\\/g, '\\\\').replace(/`/g, '\\`').replace(/\$\{/g, '\\${')}\``;
+
+const { upQueries, downQueries } = await dataSource.driver.createSchemaBuilder().log();
+const downs = [...downQueries].reverse();
+const start = Date.now();
+upQueries.forEach(({ query }, index) => {
+  const name = sentence(query);
+  const stamp = start + index;
+  const down = downs[index]?.query;
+  writeFileSync(
+    join(folder, `${stamp}-${kebab(name)}.ts`),
+    `import type { MigrationInterface, QueryRunner } from 'typeorm';
+
+export class ${name}${stamp} implements MigrationInterface {
+  async up(queryRunner: QueryRunner): Promise<void> {
+    await queryRunner.query(${literal(query)});
+  }
+
+  async down(queryRunner: QueryRunner): Promise<void> {
+    await queryRunner.query(${literal(down ?? 'SELECT 1')});
+  }
+}
+`,
+  );
+});
+
+const files = readdirSync(folder).filter((file) => file.endsWith('.ts')).sort();
+const classes = files.map((file) => ({ file, name: /export class (\w+)/.exec(readFileSync(join(folder, file), 'utf8'))?.[1] ?? '' }));
+writeFileSync(
+  join(folder, '../migrations.ts'),
+  `import type { MixedList } from 'typeorm';
+${classes.map(({ file, name }) => `import { ${name} } from './migrations/${file.replace(/\.ts$/, '.js')}';`).join('\n')}
+
+// Written by \`npm run migrations:generate\`: every migration, in the order they run.
+export const MIGRATIONS: MixedList<Function> = [
+${classes.map(({ name }) => `  ${name},`).join('\n')}
+];
+`,
+);
+console.log(`${upQueries.length} migrations written`);
+await dataSource.destroy();
