@@ -9,13 +9,13 @@ import {
 export const MU = {
   muscle: 0.0205,
   fat: 0.0184,
-  cortex: 0.034,
-  spongy: 0.0092,
+  cortex: 0.05,
+  spongy: 0.0145,
   gas: -0.0203,
   polyethylene: -0.0012,
   cement: 0.05,
   ceramic: 0.13,
-  titanium: 0.14,
+  titanium: 0.13,
   cobalt: 0.42,
   steel: 0.4,
   lead: 1.2,
@@ -23,19 +23,20 @@ export const MU = {
 
 const fine = grain(11, 0.7, 3.2);
 const broad = grain(12, 2.5, 9);
-const clouds = grain(13, 10, 36, 1);
+const clouds = grain(13, 9, 40, 1);
 
-/** Spongy bone's pattern: streaks along `angle` (radians), mean 1. */
+/** Spongy bone's streaks along `angle` (radians), mean 0; what changes slowly is in `patches`. */
 export function trabeculae(angle = 0, strength = 1) {
   const c = Math.cos(angle);
   const s = Math.sin(angle);
   return (ex, ey) => {
     const u = ex * c + ey * s;
     const v = ey * c - ex * s;
-    const streaks = fine(u * 0.42, v) + 0.6 * fine(v * 0.55 + 40, u + 17);
-    return Math.max(0.1, 1 + strength * (0.2 * streaks + 0.14 * broad(ex, ey) + 0.09 * clouds(ex, ey)));
+    return strength * (0.1 * fine(u * 0.42, v) + 0.06 * fine(v * 0.55 + 40, u + 17));
   };
 }
+
+const patches = (ex, ey) => 1 + 0.06 * broad(ex, ey) + 0.12 * clouds(ex, ey);
 
 export const cloudiness = (ex, ey) => clouds(ex, ey);
 export const mottle = (ex, ey) => broad(ex, ey);
@@ -45,12 +46,15 @@ const dome = (q) => (q >= 1 ? 1 : q <= 0 ? 0 : Math.sqrt(q * (2 - q)));
 /** Thickness field from weighted places [x, y, z, thickness mm, reach mm]. */
 export function thicknessField(camera, places) {
   const spots = places.map(([x, y, z, t, reach]) => [...toPlane(camera, [x, y, z]), t, 1 / (2 * reach * reach)]);
+  const flat = Float64Array.from(spots.flat());
   return (ex, ey) => {
     let sum = 0;
     let weight = 1e-9;
-    for (const [x, y, t, k] of spots) {
-      const w = Math.exp(-((ex - x) ** 2 + (ey - y) ** 2) * k) + 1e-5;
-      sum += w * t;
+    for (let i = 0; i < flat.length; i += 4) {
+      const dx = ex - flat[i];
+      const dy = ey - flat[i + 1];
+      const w = Math.exp(-(dx * dx + dy * dy) * flat[i + 3]) + 1e-5;
+      sum += w * flat[i + 2];
       weight += w;
     }
     return sum / weight;
@@ -64,9 +68,10 @@ export function thicknessField(camera, places) {
  * @property {number=} from @property {number=} to  lining's arc, radians
  */
 
-function hollowOut(cavities, ex, ey, thickness) {
-  let t = thickness;
-  let lining = 0;
+/** What cavities leave of a thickness, to out[0], and their lining, to out[1]. */
+function hollowOut(cavities, ex, ey, thickness, out) {
+  out[0] = thickness;
+  out[1] = 0;
   for (const c of cavities) {
     const dx = ex - c.x;
     const dy = ey - c.y;
@@ -75,14 +80,13 @@ function hollowOut(cavities, ex, ey, thickness) {
     if (outer <= 0) continue;
     const inner = c.radius * c.radius - r2;
     const hole = inner > 0 ? 2 * Math.sqrt(inner) : 0;
-    t = Math.max(thickness * c.left, t - hole * (c.depth ?? 1));
+    out[0] = Math.max(thickness * c.left, out[0] - hole * (c.depth ?? 1));
     let turn = Math.atan2(dy, dx) - (c.from ?? -Math.PI);
     if (turn < 0) turn += 2 * Math.PI;
     const span = (c.to ?? Math.PI) - (c.from ?? -Math.PI);
     const arc = span > 6.2 ? 1 : smooth(0, 0.35, turn) * smooth(0, 0.35, span - turn);
-    lining += arc * (2 * Math.sqrt(outer) - hole) * (c.weight ?? 1);
+    out[1] += arc * (2 * Math.sqrt(outer) - hole) * (c.weight ?? 1);
   }
-  return [t, lining];
 }
 
 // A flat bone seen from the side shows its substance on a smaller field.
@@ -103,25 +107,30 @@ export function addBone(sheet, bone) {
   const packed = clamp(area(bone.outlines[0]) / area(outlines[0]), 0.8, 2.4);
   const pattern = bone.pattern ?? trabeculae();
   const { plate = 1, density = 1, cavities = [], clip } = bone;
-  const out = new Float64Array(3);
-  const grid = coarse(sheet, outlineBox(outlines[0], 1), clip ? 5 : 4, (ex, ey, to) => {
-    distance(ex, ey, out);
-    to[0] = out[0];
-    to[1] = out[1];
-    to[2] = out[2];
-    to[3] = bone.thickness(ex, ey, out[2]);
-    if (clip) to[4] = clip(ex, ey);
+  const grid = coarse(sheet, outlineBox(outlines[0], 1), 6, (ex, ey, to) => {
+    distance(ex, ey, to);
+    if (to[0] < -2) return;
+    to[3] = bone.thickness(ex, ey);
+    to[4] = patches(ex, ey);
+    to[5] = clip ? clip(ex, ey) : 1;
   });
-  eachPixel(sheet, grid, (k, ex, ey, [d, cortex, edge, thick, side]) => {
+  const left = new Float64Array(2);
+  eachPixel(sheet, grid, (k, ex, ey, at) => {
+    const d = at[0];
     if (d <= 0) return;
-    const cut = clip ? smooth(-0.15, 0.15, side) : 1;
+    const cut = smooth(-0.15, 0.15, at[5]);
     if (cut === 0) return;
-    const [t, lining] = hollowOut(cavities, ex, ey, thick);
-    const outer = t * dome(d / edge);
-    const core = Math.max(0, t - 2 * plate) * dome((d - cortex) / Math.max(0.5, edge - cortex));
+    const cortex = at[1];
+    hollowOut(cavities, ex, ey, at[3], left);
+    const t = left[0];
+    // An edge without cortex is one bone passing behind another: it fades.
+    const fade = cortex < 0.55 ? (1 - smooth(0.35, 0.55, cortex)) * (1 - smooth(0, 15, d)) : 0;
+    const outer = t * dome(d / at[2]) * (1 - fade);
+    const core = Math.max(0, t - 2 * plate) * dome((d - cortex) / Math.max(0.5, at[2] - cortex));
     const inner = Math.min(core, outer);
-    const shell = outer - inner + Math.min(lining, 14) * smooth(0, 3, d);
-    sheet.tissue[k] += cut * density * packed * (MU.cortex * shell + MU.spongy * inner * pattern(ex, ey));
+    const shell = outer - inner + Math.min(left[1], 14) * smooth(0, 3, d);
+    const spongy = inner > 0 ? inner * Math.max(0.1, at[4] + pattern(ex, ey)) : 0;
+    sheet.tissue[k] += cut * density * packed * (MU.cortex * shell + MU.spongy * spongy);
   });
 }
 
@@ -132,7 +141,7 @@ export function addBone(sheet, bone) {
  * @param {{bend?: number, cortex?: number, mu?: number, reach?: number}} surface bend radius and thickness, mm
  */
 export function addRidge(sheet, points, side, surface = {}) {
-  const { bend = 12, cortex = 1, mu = MU.cortex, reach = 7 } = surface;
+  const { bend = 12, cortex = 1, mu = MU.cortex, reach = 7, soft = 0.5 } = surface;
   const line = planeOutline(sheet.camera, points);
   const grid = coarse(sheet, outlineBox(line, reach), 2, (ex, ey, out) => {
     let best = 1e12;
@@ -150,19 +159,21 @@ export function addRidge(sheet, points, side, surface = {}) {
       out[1] = w + t * (line[i + 1][2] - w);
     }
   });
-  eachPixel(sheet, grid, (k, ex, ey, [d, weight]) => {
+  eachPixel(sheet, grid, (k, ex, ey, at) => {
+    const d = at[0];
     if (d <= 0 || d > reach) return;
     const outer = Math.sqrt(Math.max(0, 2 * bend * d - d * d));
     const e = d - cortex;
     const r = bend - cortex;
     const inner = e > 0 ? Math.sqrt(Math.max(0, 2 * r * e - e * e)) : 0;
-    sheet.tissue[k] += mu * weight * 2 * (outer - inner) * smooth(reach, reach * 0.4, d);
+    sheet.tissue[k] += mu * at[1] * 2 * (outer - inner) * smooth(0, soft, d) * smooth(reach, reach * 0.4, d);
   });
 }
 
-/** Cloudy radiolucent or dense spot inside a bone. */
-export function addSpot(sheet, solid, mu, roughness = 0.3) {
-  addSolid(sheet, solid, mu, 'tissue', (ex, ey) => clamp(1 + roughness * broad(ex + 31, ey - 12), 0.1, 2));
+/** Cloudy radiolucent or dense spot; `widest` (mm) gives it a gradual edge. */
+export function addSpot(sheet, spot, mu, roughness = 0.3, widest = 0) {
+  const solid = widest ? { box: spot.box, chord: (ex, ey) => spot.chord(ex, ey) ** 2 / widest } : spot;
+  addSolid(sheet, solid, mu, 'tissue', (ex, ey) => clamp(1 + roughness * clouds(ex * 1.6 + 31, ey * 1.6 - 12), 0.1, 2));
 }
 
 /** Points mirrored to a side and shifted. */

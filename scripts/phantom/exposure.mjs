@@ -1,7 +1,7 @@
 // What the detector and its processing make of the attenuation: scatter, blur, quantum noise,
 // logarithm, evening out of large differences, edge emphasis, twelve bits.
 
-import { clamp, seededRandom } from './geometry.mjs';
+import { clamp, mix, seededRandom } from './geometry.mjs';
 
 /** Running mean along rows, written transposed. */
 function boxTransposed(data, width, height, radius) {
@@ -50,17 +50,21 @@ function shrink(data, width, height) {
   return { w, h, data: out };
 }
 
-/** Bilinear reading of a shrunken field. */
-function reader({ w, h, data }) {
-  return (x, y) => {
-    const u = clamp((x - 3) / CELL, 0, w - 1.001);
+/** Row by row, a shrunken field brought back to the film's size. */
+function rowsOf({ w, h, data }, width) {
+  const across = new Float32Array(w + 1);
+  const row = new Float32Array(width);
+  return (y) => {
     const v = clamp((y - 3) / CELL, 0, h - 1.001);
-    const i = Math.floor(u);
     const j = Math.floor(v);
-    const k = j * w + i;
-    const top = data[k] + (data[k + 1] - data[k]) * (u - i);
-    const low = data[k + w] + (data[k + w + 1] - data[k + w]) * (u - i);
-    return top + (low - top) * (v - j);
+    for (let i = 0; i < w; i++) across[i] = mix(data[j * w + i], data[(j + 1) * w + i], v - j);
+    across[w] = across[w - 1];
+    for (let x = 0; x < width; x++) {
+      const u = Math.max(0, (x - 3) / CELL);
+      const i = u | 0;
+      row[x] = across[i] + (across[i + 1] - across[i]) * (u - i);
+    }
+    return row;
   };
 }
 
@@ -83,14 +87,15 @@ function detect(sheet, spec) {
   for (let i = 0; i < n; i++) sharp[i] = 0.45 * primary[i] + 0.55 * sharp[i];
   const small = shrink(primary, width, height);
   for (let i = 0; i < small.data.length; i++) small.data[i] = Math.min(small.data[i], 0.09);
-  const haze = reader({ ...small, data: blur(small.data, small.w, small.h, 14) });
+  const haze = rowsOf({ ...small, data: blur(small.data, small.w, small.h, 14) }, width);
   const bell = bellTable(spec.seed * 31 + 7);
   const pick = seededRandom(spec.seed * 131 + 5);
   const out = new Float32Array(n);
   for (let y = 0; y < height; y++) {
+    const veil = haze(y);
     for (let x = 0; x < width; x++) {
       const i = y * width + x;
-      const signal = sharp[i] + scatter * haze(x, y) + 2e-4;
+      const signal = sharp[i] + scatter * veil[x] + 2e-4;
       const noise = bell[(pick() * 65536) | 0] / Math.sqrt(quanta * signal * 60);
       out[i] = -Math.log(signal * Math.max(0.2, 1 + noise));
     }
@@ -124,31 +129,41 @@ function collimate(pixels, spec) {
   }
 }
 
+const TONES = 16384;
+
+/** Grey values for 0 to twice the range: a straight part and a shoulder for metal. */
+function toneCurve() {
+  return Uint16Array.from({ length: TONES }, (_, i) => {
+    const v = (2 * i) / (TONES - 1);
+    const bent = v < 0.66 ? v : 0.66 + 0.34 * Math.tanh((v - 0.66) / 0.34);
+    return Math.round(4095 * clamp(bent, 0, 1) ** 1.25);
+  });
+}
+
 /** @returns {Uint16Array} 12-bit pixels, bright where the beam was weakened */
 export function expose(sheet, spec) {
   const { width, height } = sheet;
   const film = detect(sheet, spec);
   const { even = 0.62, emphasis = 0.55 } = spec.exposure;
-  const calm = Float32Array.from(sheet.tissue, (v) => clamp(v, 1.2, 6));
-  const small = shrink(calm, width, height);
-  const base = reader({ ...small, data: blur(small.data, small.w, small.h, 9) });
+  const small = shrink(sheet.tissue, width, height);
+  for (let i = 0; i < small.data.length; i++) small.data[i] = clamp(small.data[i], 1.2, 6);
+  const base = rowsOf({ ...small, data: blur(small.data, small.w, small.h, 9) }, width);
   const soft = blur(film, width, height, 4);
   const middle = small.data.reduce((a, b) => a + b, 0) / small.data.length;
   for (let y = 0; y < height; y++) {
+    const wide = base(y);
     for (let x = 0; x < width; x++) {
       const i = y * width + x;
-      film[i] += emphasis * (film[i] - soft[i]) - even * (base(x, y) - middle) + 2;
+      film[i] += emphasis * (film[i] - soft[i]) - even * (wide[x] - middle) + 2;
     }
   }
   const share = levels(film);
-  const low = share(0.3) - 1.05;
-  const high = share(0.3) + 1.5;
+  const low = share(0.3) - 0.66;
+  const high = share(0.3) + 1.3;
+  const tone = toneCurve();
   const pixels = new Uint16Array(width * height);
-  for (let i = 0; i < pixels.length; i++) {
-    const v = (film[i] - low) / (high - low);
-    const bent = v < 0.75 ? v : 0.75 + 0.25 * Math.tanh((v - 0.75) / 0.25);
-    pixels[i] = clamp(Math.round(4095 * clamp(bent, 0, 1) ** 1.25), 0, 4095);
-  }
+  const k = (TONES - 1) / 2 / (high - low);
+  for (let i = 0; i < pixels.length; i++) pixels[i] = tone[clamp(Math.round((film[i] - low) * k), 0, TONES - 1)];
   collimate(pixels, spec);
   return pixels;
 }

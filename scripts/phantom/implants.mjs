@@ -3,7 +3,7 @@
 import { add, circlePoints, clamp, cross, dot, DEG, perpendiculars, scale, sub, unit } from './geometry.mjs';
 import { MU, mottle } from './bones.mjs';
 import { addSolid } from './raster.mjs';
-import { cappedShell, ellipsoid, frustum, loft, sphere, threadedRod } from './solids.mjs';
+import { cappedShell, ellipsoid, frustum, fused, loft, sphere, threadedRod } from './solids.mjs';
 
 const METAL = { titanium: MU.titanium, cobalt: MU.cobalt, steel: MU.steel, ceramic: MU.ceramic };
 
@@ -148,13 +148,11 @@ export function addStem(sheet, { stem, head }, frame, brokenFrame) {
     addSolid(sheet, loft(camera, stemNodes(frame, mantle(rows)), frame.lateral, true), MU.cement * 0.55, 'tissue', rough);
   }
   const parts = stem.fractureAt ? cutRows(rows, stem.fractureAt) : [rows];
-  parts.forEach((part, i) =>
-    addMetal(sheet, loft(camera, stemNodes(i ? brokenFrame : frame, part), frame.lateral), mu),
-  );
-  const neck = [[39, -30], [22, -18.5], [10, -8.4], [3, -2.5]].map((p) => frame.toPatient([...p, 0]));
-  const radii = [8.5, 6.2, 5.9, 5.6];
+  const pieces = parts.map((part, i) => loft(camera, stemNodes(i ? brokenFrame : frame, part), frame.lateral));
+  const neck = [[35, -28], [22, -18.2], [10, -8.4], [3, -2.5]].map((p) => frame.toPatient([...p, 0]));
+  const radii = [7, 6.1, 5.9, 5.6];
   const nodes = neck.map((p, i) => ({ p, a: radii[i], b: radii[i] * 0.9 }));
-  addMetal(sheet, loft(camera, nodes, frame.lateral), mu);
+  addMetal(sheet, fused([...pieces, loft(camera, nodes, frame.lateral)]), mu);
   return { tip: (stem.fractureAt ? brokenFrame : frame).toPatient([(rows.at(-1)[1] + rows.at(-1)[2]) / 2, rows.at(-1)[0], 0]) };
 }
 

@@ -50,21 +50,21 @@ export function addSolid(sheet, solid, mu, layer = 'tissue', shade) {
   }
 }
 
-/** Grid of every second pixel with bilinear reading, for what changes slowly. */
-export function coarse(sheet, box, channels, fill) {
+/** Grid of every second pixel (or `step`) with bilinear reading, for what changes slowly. */
+export function coarse(sheet, box, channels, fill, step = STEP) {
   const { camera } = sheet;
   const [x0, x1, y0, y1] = columns(sheet, box);
-  const w = Math.ceil((x1 - x0) / STEP) + 2;
-  const h = Math.ceil((y1 - y0) / STEP) + 2;
+  const w = Math.ceil((x1 - x0) / step) + 2;
+  const h = Math.ceil((y1 - y0) / step) + 2;
   const data = Array.from({ length: channels }, () => new Float32Array(w * h));
   const out = new Float64Array(channels);
   for (let j = 0; j < h; j++) {
     for (let i = 0; i < w; i++) {
-      fill((x0 + i * STEP - camera.cx) * camera.pitch, (camera.cy - y0 - j * STEP) * camera.pitch, out);
+      fill((x0 + i * step - camera.cx) * camera.pitch, (camera.cy - y0 - j * step) * camera.pitch, out);
       for (let c = 0; c < channels; c++) data[c][j * w + i] = out[c];
     }
   }
-  return { x0, x1, y0, y1, w, h, data };
+  return { x0, x1, y0, y1, w, h, data, step };
 }
 
 /** Calls `visit(pixelIndex, ex, ey, values)` for all pixels of a coarse grid. */
@@ -72,11 +72,11 @@ export function eachPixel(sheet, grid, visit) {
   const { camera, width } = sheet;
   const values = new Float64Array(grid.data.length);
   for (let y = grid.y0; y < grid.y1; y++) {
-    const v = (y - grid.y0) / STEP;
+    const v = (y - grid.y0) / grid.step;
     const j = Math.floor(v);
     const fv = v - j;
     for (let x = grid.x0; x < grid.x1; x++) {
-      const u = (x - grid.x0) / STEP;
+      const u = (x - grid.x0) / grid.step;
       const i = Math.floor(u);
       const fu = u - i;
       const k = j * grid.w + i;
@@ -105,54 +105,88 @@ export function outlineBox(outline, margin = 0) {
   ];
 }
 
+const CELL = 8;
+
+/** Squared distance to the segment at `k`; the place along it goes to `where[0]`. */
+function toSegment(f, k, ex, ey, where) {
+  const ox = ex - f[k];
+  const oy = ey - f[k + 1];
+  const t = clamp((ox * f[k + 2] + oy * f[k + 3]) * f[k + 4], 0, 1);
+  where[0] = t;
+  const rx = ox - t * f[k + 2];
+  const ry = oy - t * f[k + 3];
+  return rx * rx + ry * ry;
+}
+
+/** Segments that can be nearest to some point of a cell of 8 mm, and those that cross its rows. */
+function cellIndex(f) {
+  const cells = new Map();
+  const bands = new Map();
+  const all = Array.from({ length: f.length / 9 }, (_, i) => i * 9);
+  const where = [0];
+  return (ex, ey) => {
+    const i = Math.floor(ex / CELL);
+    const j = Math.floor(ey / CELL);
+    const key = i * 4096 + j;
+    let found = cells.get(key);
+    if (!found) {
+      const far = all.map((k) => Math.sqrt(toSegment(f, k, (i + 0.5) * CELL, (j + 0.5) * CELL, where)));
+      const limit = Math.min(...far) + CELL * 1.42;
+      if (!bands.has(j)) {
+        const low = (k) => Math.min(f[k + 1], f[k + 1] + f[k + 3]);
+        const high = (k) => Math.max(f[k + 1], f[k + 1] + f[k + 3]);
+        bands.set(j, Int32Array.from(all.filter((k) => low(k) <= (j + 1) * CELL && high(k) >= j * CELL)));
+      }
+      found = { near: Int32Array.from(all.filter((_, n) => far[n] <= limit)), band: bands.get(j) };
+      cells.set(key, found);
+    }
+    return found;
+  };
+}
+
 /**
  * Distance (mm, positive inside) to closed outlines, even-odd, with two attributes of the nearest
  * place on them. @returns {(ex: number, ey: number, out: Float64Array) => void}
  */
 export function outlineDistance(outlines) {
   const segs = outlines.flatMap((o) => o.map((p, i) => [p, o[(i + 1) % o.length]]));
-  const n = segs.length;
-  const f = new Float64Array(n * 9);
+  const f = new Float64Array(segs.length * 9);
   segs.forEach(([p, q], i) => {
     const dx = q[0] - p[0];
     const dy = q[1] - p[1];
     f.set([p[0], p[1], dx, dy, 1 / (dx * dx + dy * dy || 1e-9), p[2], q[2] - p[2], p[3], q[3] - p[3]], i * 9);
   });
+  const lookUp = cellIndex(f);
+  const where = [0];
   return (ex, ey, out) => {
+    const { near, band } = lookUp(ex, ey);
     let best = 1e12;
-    let at = 0;
-    let where = 0;
+    for (const k of near) {
+      const r = toSegment(f, k, ex, ey, where);
+      if (r >= best) continue;
+      best = r;
+      out[1] = f[k + 5] + where[0] * f[k + 6];
+      out[2] = f[k + 7] + where[0] * f[k + 8];
+    }
     let inside = false;
-    for (let k = 0; k < n * 9; k += 9) {
-      const ox = ex - f[k];
+    for (const k of band) {
       const oy = ey - f[k + 1];
-      const dx = f[k + 2];
       const dy = f[k + 3];
-      let t = (ox * dx + oy * dy) * f[k + 4];
-      t = t < 0 ? 0 : t > 1 ? 1 : t;
-      const rx = ox - t * dx;
-      const ry = oy - t * dy;
-      const r = rx * rx + ry * ry;
-      if (r < best) {
-        best = r;
-        at = k;
-        where = t;
-      }
-      if (oy < 0 !== oy - dy < 0 && ox < (oy / dy) * dx) inside = !inside;
+      if (oy < 0 !== oy - dy < 0 && ex - f[k] < (oy / dy) * f[k + 2]) inside = !inside;
     }
     out[0] = inside ? Math.sqrt(best) : -Math.sqrt(best);
-    out[1] = f[at + 5] + where * f[at + 6];
-    out[2] = f[at + 7] + where * f[at + 8];
   };
 }
 
+/** Running mean along rows that wrap round, written transposed. */
 const blur = (data, size, radius) => {
   const out = new Float32Array(data.length);
   for (let y = 0; y < size; y++) {
+    let sum = 0;
+    for (let k = -radius; k <= radius; k++) sum += data[y * size + ((k + size) % size)];
     for (let x = 0; x < size; x++) {
-      let sum = 0;
-      for (let k = -radius; k <= radius; k++) sum += data[y * size + ((x + k + size) % size)];
       out[x * size + y] = sum / (2 * radius + 1);
+      sum += data[y * size + ((x + radius + 1) % size)] - data[y * size + ((x - radius + size) % size)];
     }
   }
   return out;

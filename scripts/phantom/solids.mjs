@@ -219,3 +219,16 @@ export function threadedRod(camera, from, to, core, ridge, pitchMm) {
     },
   };
 }
+
+/** Parts of one piece: where they overlap the longest chord counts, not the sum. @returns {Solid} */
+export const fused = (parts) => ({
+  box: joinBoxes(parts.map((p) => p.box)),
+  chord: (ex, ey) => {
+    let longest = 0;
+    for (const p of parts) {
+      const b = p.box;
+      if (ex >= b[0] && ex <= b[1] && ey >= b[2] && ey <= b[3]) longest = Math.max(longest, p.chord(ex, ey));
+    }
+    return longest;
+  },
+});
