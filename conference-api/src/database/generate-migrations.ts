@@ -33,12 +33,11 @@ const kebab = (text: string) => text.replace(/([a-z0-9])([A-Z])/g, '$1-$2').toLo
 const literal = (text: string) => `\`${text.replace(/\\/g, '\\\\').replace(/`/g, '\\`').replace(/\$\{/g, '\\${')}\``;
 
 const { upQueries, downQueries } = await dataSource.driver.createSchemaBuilder().log();
-const downs = [...downQueries].reverse();
 const start = Date.now();
 upQueries.forEach(({ query }, index) => {
   const name = sentence(query);
   const stamp = start + index;
-  const down = downs[index]?.query;
+  const down = downQueries[index]?.query;
   writeFileSync(
     join(folder, `${stamp}-${kebab(name)}.ts`),
     `import type { MigrationInterface, QueryRunner } from 'typeorm';

@@ -18,7 +18,7 @@ export class OneTimeToken {
   @JoinColumn({ name: 'personId' })
   person: Relation<Person>;
 
-  @CreateDateColumn({ precision: 3 })
+  @CreateDateColumn({ precision: 3, default: () => 'CURRENT_TIMESTAMP(3)' })
   createdAt: Date;
 
   @Column({ type: 'datetime', precision: 3 })

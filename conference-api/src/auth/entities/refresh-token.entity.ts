@@ -14,7 +14,7 @@ export class RefreshToken {
   @JoinColumn({ name: 'sessionId' })
   session: Relation<Session>;
 
-  @CreateDateColumn({ precision: 3 })
+  @CreateDateColumn({ precision: 3, default: () => 'CURRENT_TIMESTAMP(3)' })
   createdAt: Date;
 
   @Column({ type: 'datetime', precision: 3, nullable: true })

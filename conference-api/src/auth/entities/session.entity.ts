@@ -20,7 +20,7 @@ export class Session {
   @Column({ length: 64 })
   address: string;
 
-  @CreateDateColumn({ precision: 3 })
+  @CreateDateColumn({ precision: 3, default: () => 'CURRENT_TIMESTAMP(3)' })
   createdAt: Date;
 
   @Column({ type: 'datetime', precision: 3 })

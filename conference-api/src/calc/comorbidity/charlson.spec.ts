@@ -7,7 +7,7 @@ const index = (conditions: string[], ageYears?: number | null) => calculateCharl
 describe('Charlson index of 1987', () => {
   // Source: weights in Charlson and others 1987 as in PMC7946705 Table 4.
   test.each([
-    [1, ['myocardial-infarct', 'congestive-heart-failure', 'peripheral-vascular-disease', 'cerebrovascular-disease', 'dementia', 'chronic-pulmonary-disease', 'connective-tissue-disease', 'ulcer-disease', 'mild-liver-disease', 'diabetes']],
+    [1, ['myocardial-infarction', 'congestive-heart-failure', 'peripheral-vascular-disease', 'cerebrovascular-disease', 'dementia', 'chronic-pulmonary-disease', 'connective-tissue-disease', 'ulcer-disease', 'mild-liver-disease', 'diabetes']],
     [2, ['hemiplegia', 'moderate-or-severe-renal-disease', 'diabetes-with-end-organ-damage', 'any-tumor', 'leukemia', 'lymphoma']],
     [3, ['moderate-or-severe-liver-disease']],
     [6, ['metastatic-solid-tumor', 'aids']],
@@ -21,7 +21,7 @@ describe('Charlson index of 1987', () => {
 
   // Worked by hand from the weights and the age points.
   test.each([
-    [['myocardial-infarction', 'diabetes'], 72, 2, 5],
+    [['myocardial-infarct', 'diabetes'], 72, 2, 5],
     [['metastatic-solid-tumor', 'any-tumor'], 58, 6, 7],
     [[], 81, 0, 4],
     [['mild-liver-disease', 'moderate-or-severe-liver-disease'], 40, 3, 3],

@@ -2,10 +2,13 @@ import { CalcInputError } from '../common/calc-input-error.js';
 import type { FieldSpec } from '../common/field-spec.js';
 import { requireArray, requireString } from '../common/input-checks.js';
 import { optionalNumber, readBody } from '../common/optional-input.js';
+import type { CharlsonCondition } from '../vocabulary/comorbidities.js';
+
+export type { CharlsonCondition } from '../vocabulary/comorbidities.js';
 
 /** Weights of the 1987 table, in its order. */
 export const CHARLSON_WEIGHTS = {
-  'myocardial-infarct': 1,
+  'myocardial-infarction': 1,
   'congestive-heart-failure': 1,
   'peripheral-vascular-disease': 1,
   'cerebrovascular-disease': 1,
@@ -24,14 +27,13 @@ export const CHARLSON_WEIGHTS = {
   'moderate-or-severe-liver-disease': 3,
   'metastatic-solid-tumor': 6,
   aids: 6,
-} as const;
+} as const satisfies Record<CharlsonCondition, number>;
 
-export type CharlsonCondition = keyof typeof CHARLSON_WEIGHTS;
 export const CHARLSON_CONDITIONS = Object.keys(CHARLSON_WEIGHTS) as CharlsonCondition[];
 
 /** Other spellings that are accepted for a name of the table. */
 const SPELLINGS: Readonly<Record<string, CharlsonCondition>> = {
-  'myocardial-infarction': 'myocardial-infarct',
+  'myocardial-infarct': 'myocardial-infarction',
   'heart-failure': 'congestive-heart-failure',
   'peripheral-vascular': 'peripheral-vascular-disease',
   'chronic-pulmonary': 'chronic-pulmonary-disease',

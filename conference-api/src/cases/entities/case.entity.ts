@@ -83,7 +83,7 @@ export class Case {
   @Column({ type: 'uuid', nullable: true })
   releasedById: string | null;
 
-  @CreateDateColumn({ precision: 3 })
+  @CreateDateColumn({ precision: 3, default: () => 'CURRENT_TIMESTAMP(3)' })
   createdAt: Date;
 
   @Column({ type: 'datetime', precision: 3 })

@@ -71,7 +71,7 @@ export const OptionalFlag = () => applyDecorators(ApiPropertyOptional({ type: Bo
 /** A list of nested objects. */
 export const OptionalList = (itemType: () => new () => object, most: number) =>
   applyDecorators(
-    ApiPropertyOptional({ type: itemType, isArray: true }),
+    ApiPropertyOptional({ type: () => itemType(), isArray: true }),
     IsOptional(),
     IsArray(),
     ArrayMaxSize(most),
@@ -80,8 +80,8 @@ export const OptionalList = (itemType: () => new () => object, most: number) =>
   );
 
 export const RequiredList = (itemType: () => new () => object, most: number) =>
-  applyDecorators(ApiProperty({ type: itemType, isArray: true }), IsArray(), ArrayMaxSize(most), ValidateNested({ each: true }), Type(itemType));
+  applyDecorators(ApiProperty({ type: () => itemType(), isArray: true }), IsArray(), ArrayMaxSize(most), ValidateNested({ each: true }), Type(itemType));
 
 /** A nested object that may be left out. */
 export const OptionalObject = (type: () => new () => object) =>
-  applyDecorators(ApiPropertyOptional({ type }), IsOptional(), ValidateNested(), Type(type));
+  applyDecorators(ApiPropertyOptional({ type: () => type() }), IsOptional(), ValidateNested(), Type(type));

@@ -53,7 +53,7 @@ export class Conference {
   @VersionColumn()
   version: number;
 
-  @CreateDateColumn({ precision: 3 })
+  @CreateDateColumn({ precision: 3, default: () => 'CURRENT_TIMESTAMP(3)' })
   createdAt: Date;
 
   @OneToMany(() => Membership, (membership) => membership.conference)

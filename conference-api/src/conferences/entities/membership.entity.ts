@@ -22,6 +22,6 @@ export class Membership {
   @Column({ length: 20 })
   role: Role;
 
-  @CreateDateColumn({ precision: 3 })
+  @CreateDateColumn({ precision: 3, default: () => 'CURRENT_TIMESTAMP(3)' })
   createdAt: Date;
 }

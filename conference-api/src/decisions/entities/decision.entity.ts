@@ -68,6 +68,6 @@ export class Decision {
   @Column({ type: 'char', length: 64, nullable: true })
   previousHash: string | null;
 
-  @CreateDateColumn({ precision: 3 })
+  @CreateDateColumn({ precision: 3, default: () => 'CURRENT_TIMESTAMP(3)' })
   createdAt: Date;
 }

@@ -43,7 +43,7 @@ export class Remark {
   @Column('int', { default: 1 })
   version: number;
 
-  @CreateDateColumn({ precision: 3 })
+  @CreateDateColumn({ precision: 3, default: () => 'CURRENT_TIMESTAMP(3)' })
   createdAt: Date;
 
   @Column({ type: 'datetime', precision: 3, nullable: true })

@@ -34,7 +34,7 @@ export class Thread {
   @Column({ type: 'datetime', precision: 3, nullable: true })
   answeredAt: Date | null;
 
-  @CreateDateColumn({ precision: 3 })
+  @CreateDateColumn({ precision: 3, default: () => 'CURRENT_TIMESTAMP(3)' })
   createdAt: Date;
 
   @OneToMany(() => Remark, (remark) => remark.thread)

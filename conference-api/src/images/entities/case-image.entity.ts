@@ -58,6 +58,6 @@ export class CaseImage {
   @Column('uuid')
   uploadedById: string;
 
-  @CreateDateColumn({ precision: 3 })
+  @CreateDateColumn({ precision: 3, default: () => 'CURRENT_TIMESTAMP(3)' })
   createdAt: Date;
 }

@@ -51,7 +51,7 @@ export class OutboxMail {
   @Column({ type: 'varchar', length: 300, nullable: true })
   lastError: string | null;
 
-  @CreateDateColumn({ precision: 3 })
+  @CreateDateColumn({ precision: 3, default: () => 'CURRENT_TIMESTAMP(3)' })
   createdAt: Date;
 
   @Column({ type: 'datetime', precision: 3, nullable: true })

@@ -52,7 +52,7 @@ export class Meeting {
   @Column('int', { default: 1 })
   version: number;
 
-  @CreateDateColumn({ precision: 3 })
+  @CreateDateColumn({ precision: 3, default: () => 'CURRENT_TIMESTAMP(3)' })
   createdAt: Date;
 
   @OneToMany(() => AgendaItem, (item) => item.meeting)

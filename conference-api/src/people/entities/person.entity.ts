@@ -34,7 +34,7 @@ export class Person {
   @Column({ default: true })
   isActive: boolean;
 
-  @CreateDateColumn({ precision: 3 })
+  @CreateDateColumn({ precision: 3, default: () => 'CURRENT_TIMESTAMP(3)' })
   createdAt: Date;
 
   @OneToMany(() => Membership, (membership) => membership.person)

@@ -13,6 +13,6 @@ export class Unit {
   @Column({ type: 'varchar', length: 254, nullable: true })
   contactEmail: string | null;
 
-  @CreateDateColumn({ precision: 3 })
+  @CreateDateColumn({ precision: 3, default: () => 'CURRENT_TIMESTAMP(3)' })
   createdAt: Date;
 }
