@@ -31,6 +31,7 @@ export function createService({ title, logFile, prepare, command, isReady, after
 
   async function waitUntilReady(own, spawnError) {
     const deadline = Date.now() + readyWithinMs;
+    const end = exited(own);
     while (!(await isReady())) {
       if (stopping) throw new Problem(`${title} was stopped while it started.`);
       if (spawnError() || hasExited(own)) {
@@ -43,7 +44,7 @@ export function createService({ title, logFile, prepare, command, isReady, after
           output: logTail(logFile),
         });
       }
-      await Promise.race([pause(100), exited(own)]);
+      await Promise.race([pause(100), end]);
     }
   }
 
