@@ -144,9 +144,10 @@ function toneCurve() {
 export function expose(sheet, spec) {
   const { width, height } = sheet;
   const film = detect(sheet, spec);
-  const { even = 0.62, emphasis = 0.55 } = spec.exposure;
+  const lateral = spec.projection === 'lateral';
+  const { even = lateral ? 0.86 : 0.62, emphasis = 0.55, level = lateral ? 0.56 : 0.3 } = spec.exposure;
   const small = shrink(sheet.tissue, width, height);
-  for (let i = 0; i < small.data.length; i++) small.data[i] = clamp(small.data[i], 1.2, 6);
+  for (let i = 0; i < small.data.length; i++) small.data[i] = clamp(small.data[i], 1.2, 8.5);
   const base = rowsOf({ ...small, data: blur(small.data, small.w, small.h, 9) }, width);
   const soft = blur(film, width, height, 4);
   const middle = small.data.reduce((a, b) => a + b, 0) / small.data.length;
@@ -158,8 +159,8 @@ export function expose(sheet, spec) {
     }
   }
   const share = levels(film);
-  const low = share(0.3) - 0.66;
-  const high = share(0.3) + 1.3;
+  const low = share(level) - 0.66;
+  const high = share(level) + 1.3;
   const tone = toneCurve();
   const pixels = new Uint16Array(width * height);
   const k = (TONES - 1) / 2 / (high - low);

@@ -2,7 +2,7 @@
 // shaft upwards; the shaft's axis is x = 42.
 
 import { addBone, addRidge, MU, thicknessField, trabeculae } from './bones.mjs';
-import { add, curve, DEG, seededRandom, toPlane } from './geometry.mjs';
+import { add, cross, curve, DEG, scale, seededRandom, toPlane } from './geometry.mjs';
 
 export const ADDUCTION = 5 * DEG;
 export const SHAFT_X = 42;
@@ -18,7 +18,7 @@ const MEDIAL = [
   [28.4, -260, 0, 6.8, 13.6], [28.2, -190, 0, 6.9, 13.8], [28, -140, 0, 6.6, 14], [27.6, -100, 0, 5.6, 14.2], [26.6, -82, 0, 4.2, 14], [24, -70, 0, 2.8, 11],
   [20.8, -62.5, 0, 1.5, 8], [20.8, -56, 0, 1.4, 8], [24.2, -49, 0, 2.4, 9], [22, -42, 0, 3.6, 13],
 ];
-const CUT_NECK = [[17.5, -34, 0, 2.8, 12], [22, -27.5, 0, 0.8, 13], [33, -20, 0, 0.5, 12], [38, -11, 0, 0.6, 8], [40.5, -4, -3, 0.9, 6]];
+const CUT_NECK = [[20, -35, 0, 2.8, 12], [24, -28.5, 0, 0.8, 13], [33, -20, 0, 0.5, 12], [38, -11, 0, 0.6, 8], [40.5, -4, -3, 0.9, 6]];
 const NECK_AND_HEAD = [
   [18, -34, 0, 3, 14], [11.5, -26, 0, 1.8, 16], [2, -23.4, 0, 1, 22], [-9, -21.7, 0, 0.9, 23], [-18, -15, 0, 0.9, 23.5], [-23, -5, 0, 0.9, 23.5], [-22.8, 6, 0, 0.9, 23.5],
   [-17, 16.3, 0, 0.9, 23.5], [-8, 22.1, 0, 0.9, 23.5], [2, 23.4, 0, 0.9, 23.5], [11, 20.7, 0, 0.9, 22], [18, 14, 0, 1, 17], [24.5, 7.5, 0, 1.3, 14], [31, 2, 0, 1.5, 12], [37.5, -1.5, -3, 1.2, 8],
@@ -26,13 +26,17 @@ const NECK_AND_HEAD = [
 
 /**
  * Turns the femur's axes into the patient's.
- * @param {number} sideSign @param {import('./geometry.mjs').Vec3} head @param {number} turn adduction, radians
+ * @param {number} sideSign @param {import('./geometry.mjs').Vec3} head
+ * @param {import('./geometry.mjs').Vec3} right image's right; the leg lies turned so that its neck is seen in full
  */
-export function femurFrame(sideSign, head, turn = ADDUCTION) {
-  const c = Math.cos(turn);
-  const s = Math.sin(turn);
-  const toPatient = ([x, y, z = 0]) => add(head, [sideSign * (x * c + y * s), y * c - x * s, z]);
-  return { sideSign, turn, toPatient, down: [-sideSign * s, -c, 0], lateral: [sideSign * c, -s, 0] };
+export function femurFrame(sideSign, head, right = [1, 0, 0]) {
+  const c = Math.cos(ADDUCTION);
+  const s = Math.sin(ADDUCTION);
+  const across = scale(right, sideSign);
+  const front = cross(right, [0, 1, 0]);
+  const toPatient = ([x, y, z = 0]) =>
+    add(head, add(scale(across, x * c + y * s), add([0, y * c - x * s, 0], scale(front, z))));
+  return { sideSign, toPatient, down: add(scale(across, -s), [0, -c, 0]), lateral: add(scale(across, c), [0, -s, 0]) };
 }
 
 const placed = (frame, points) => points.map((p) => [...frame.toPatient(p), ...p.slice(3)]);
@@ -65,7 +69,7 @@ function breakLine(camera, frame, path, seed) {
 
 /**
  * Femur of one side.
- * @param {object} femur frame, operated (neck cut), fracture ({path, shift, turnDeg}), cavities, density, seed
+ * @param {object} femur frame, operated (neck cut), fracture ({path}) with the lower part's frame `slipped`, cavities, density, seed
  */
 export function addFemur(sheet, femur) {
   const { camera } = sheet;
@@ -83,13 +87,10 @@ export function addFemur(sheet, femur) {
     });
   if (!femur.fracture) draw(frame);
   else {
-    const { path, shift, turnDeg } = femur.fracture;
-    const upper = breakLine(camera, frame, path, seed);
-    draw(frame, upper);
-    const pivot = path[Math.floor(path.length / 2)];
-    const moved = movedFrame(frame, pivot, shift, turnDeg * DEG);
-    const lower = breakLine(camera, moved, path, seed);
-    draw(moved, (ex, ey) => -lower(ex, ey));
+    const { path } = femur.fracture;
+    draw(frame, breakLine(camera, frame, path, seed));
+    const lower = breakLine(camera, femur.slipped, path, seed);
+    draw(femur.slipped, (ex, ey) => -lower(ex, ey));
   }
   const line = (pts) => curve(placed(frame, pts), { steps: 5 });
   const s = frame.sideSign > 0 ? 1 : -1;

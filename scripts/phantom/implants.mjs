@@ -51,13 +51,15 @@ function addScrews(sheet, places) {
   }
 }
 
-function addHoles(sheet, shell, centre, opening) {
+function addHoles(sheet, shell, centre, opening, wall) {
   const outer = shell.outerMm / 2;
   const holes = shell.holes ?? [[26, 20], [30, -28], [52, -4], [50, 62]];
   for (const [polar, clock] of holes) {
     const d = screwDirection(opening, polar, clock);
     const from = add(centre, scale(d, outer - shell.wallMm - 0.2));
-    addMetal(sheet, frustum(sheet.camera, from, add(centre, scale(d, outer + 0.3)), 4.2, 3.6), -METAL[shell.material ?? 'titanium']);
+    const hole = frustum(sheet.camera, from, add(centre, scale(d, outer + 0.3)), 4.2, 3.6);
+    const inWall = { box: hole.box, chord: (ex, ey) => Math.min(hole.chord(ex, ey), wall.chord(ex, ey)) };
+    addMetal(sheet, inWall, -METAL[shell.material ?? 'titanium']);
   }
 }
 
@@ -89,8 +91,9 @@ export function addCup(sheet, { shell, liner }, centre, opening, screws) {
   if (shell.kind === 'cemented') return addCementedCup(sheet, shell, centre, opening);
   const inner = outer - shell.wallMm;
   const coat = (ex, ey) => 1 + 0.03 * mottle(ex * 2, ey * 2);
-  addMetal(sheet, cappedShell(camera, centre, opening, outer, inner), METAL[shell.material ?? 'titanium'], coat);
-  addHoles(sheet, shell, centre, opening);
+  const wall = cappedShell(camera, centre, opening, outer, inner);
+  addMetal(sheet, wall, METAL[shell.material ?? 'titanium'], coat);
+  addHoles(sheet, shell, centre, opening, wall);
   addScrews(sheet, screws);
   addLiner(sheet, liner, centre, opening, inner);
 }

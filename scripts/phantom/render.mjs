@@ -44,7 +44,7 @@ function drawPelvis(sheet, spec, scene) {
     const [x, y] = toPlane(camera, femur.bone.toPatient([...c.atMm, 0]));
     return { x, y, radius: c.radiusMm, lining: 0.6, left: 0.4, depth: 1.1, weight: 0.6 };
   });
-  addFemur(sheet, { frame: femur.bone, operated: true, density, seed: spec.seed, fracture: spec.femurFracture, cavities: lysis });
+  addFemur(sheet, { frame: femur.bone, operated: true, density, seed: spec.seed, fracture: spec.femurFracture, slipped: femur.slipped, cavities: lysis });
 }
 
 /**

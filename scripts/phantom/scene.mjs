@@ -52,21 +52,22 @@ function cameraFor(spec, sideSign, hip) {
     const camera = makeCamera({ ...film, rollDeg: 0, toSource, up: [0, 0, 1], target });
     return { front, camera };
   }
-  const turn = (spec.projection === 'oblique-iliac' ? sideSign : -sideSign) * 42 * DEG;
+  // Turned so that the obturator foramen of the operated side opens.
+  const turn = sideSign * 38 * DEG;
   const toSource = [Math.sin(turn), 0, Math.cos(turn)];
-  const target = [hip[0] * 0.6, spec.centreMm[1], 0];
+  const target = [hip[0] * 0.86, spec.centreMm[1], 0];
   return { front, camera: makeCamera({ ...film, toSource, up: [0, 1, 0], target }) };
 }
 
 /** Femur's origin along the shaft, so that the lesser trochanters show the leg-length difference asked for. */
-function seatFemur(sideSign, headCentre, wantedMm) {
-  const stem = femurFrame(sideSign, headCentre);
-  const other = femurFrame(-sideSign, [-sideSign * HIP.x, HIP.y, 0]);
+function seatFemur(sideSign, headCentre, wantedMm, right) {
+  const stem = femurFrame(sideSign, headCentre, right);
+  const other = femurFrame(-sideSign, [-sideSign * HIP.x, HIP.y, 0], right);
   const otherLesser = other.toPatient(LESSER);
   const own = otherLesser[1] - stem.toPatient(LESSER)[1];
   const slide = wantedMm === undefined ? 0 : (wantedMm - own) / -stem.down[1];
-  const bone = femurFrame(sideSign, add(headCentre, scale(stem.down, slide)));
-  return { stem, bone, other, otherLesser, lesser: bone.toPatient(LESSER), slide };
+  const bone = femurFrame(sideSign, add(headCentre, scale(stem.down, slide)), right);
+  return { stem, bone, other, otherLesser, lesser: bone.toPatient(LESSER) };
 }
 
 /** All places of a spec. */
@@ -80,7 +81,13 @@ export function layOut(spec) {
   const opening = openingAxis(space.inclinationDeg, space.versionDeg, sideSign);
   const worn = head.wearMm ? scale([sideSign * 0.35, 0.94, 0], head.wearMm) : [0, 0, 0];
   const headCentre = add(cup, worn);
-  const femur = seatFemur(sideSign, headCentre, spec.legLengthDifferenceMm);
+  const right = spec.projection === 'oblique' ? camera.right : undefined;
+  const femur = seatFemur(sideSign, headCentre, spec.legLengthDifferenceMm, right);
+  const { femurFracture: fracture } = spec;
+  if (fracture) {
+    const pivot = fracture.path[Math.floor(fracture.path.length / 2)];
+    femur.slipped = movedFrame(femur.bone, pivot, fracture.shift, fracture.turnDeg * DEG);
+  }
   const broken = spec.stem.fractureAt
     ? movedFrame(femur.stem, [44, spec.stem.fractureAt], spec.stem.fractureShift ?? [0, -2], (spec.stem.fractureTurnDeg ?? 7) * DEG)
     : undefined;
