@@ -7,7 +7,7 @@ import {
   requireOnlyKnown,
   requireString,
 } from '../common/input-checks.js';
-import { scaleNumbers, unscale } from './decimals.js';
+import { countDecimals, scaleNumbers, unscale } from './decimals.js';
 import { solveKnapsack, type KnapsackItem } from './knapsack.js';
 
 export interface AgendaItem {
@@ -46,7 +46,7 @@ export const AGENDA_FILL_FIELDS: readonly FieldSpec[] = [
 
 const MOST_ITEMS = 1000;
 const LARGEST_NUMBER = 1e9;
-const MOST_DECIMALS = 20;
+const MOST_DECIMALS = 6;
 
 const DEFINITION =
   'Exact 0/1 knapsack: must-haves first, then the most priority that fits; ties go to fewer minutes ' +
@@ -54,7 +54,7 @@ const DEFINITION =
 
 interface Problem {
   items: { id: string; mustHave: boolean; packed: KnapsackItem }[];
-  capacity: bigint;
+  capacity: number;
   minuteDecimals: number;
   priorityDecimals: number;
 }
@@ -66,14 +66,15 @@ interface Problem {
  *
  * Source: the 0/1 knapsack problem (Martello S, Toth P. Knapsack Problems, 1990).
  *
- * @throws CalcInputError for numbers below 0 or above 1e9, more than 20 decimals, a
- * repeated id, more than 1000 items, or (`too-hard`) items that no search settles in time.
+ * @throws CalcInputError for numbers below 0 or above 1e9, more than six decimals, a repeated
+ * id, more than 1000 items, sums too large to be exact (`too-large`), or items that no search
+ * settles in time (`too-hard`).
  */
 export function agendaFill(input: AgendaFillInput): AgendaFillAnswer {
   const { items, capacity, minuteDecimals, priorityDecimals } = readProblem(input);
   const chosen = new Set<number>();
-  let used = 0n;
-  const choose = (indices: readonly number[], room: bigint) => {
+  let used = 0;
+  const choose = (indices: readonly number[], room: number) => {
     const best = solveKnapsack(indices.map((index) => packedAt(items, index)), room);
     if (best === null) {
       throw new CalcInputError(
@@ -88,7 +89,7 @@ export function agendaFill(input: AgendaFillInput): AgendaFillAnswer {
 
   const indices = items.map((_, index) => index);
   const must = indices.filter((index) => items[index]?.mustHave);
-  const mustSize = must.reduce((sum, index) => sum + packedAt(items, index).size, 0n);
+  const mustSize = must.reduce((sum, index) => sum + packedAt(items, index).size, 0);
   const mustFit = mustSize <= capacity;
   if (mustFit) {
     for (const index of must) chosen.add(index);
@@ -99,7 +100,7 @@ export function agendaFill(input: AgendaFillInput): AgendaFillAnswer {
   }
 
   const order = indices.filter((index) => chosen.has(index));
-  const worth = order.reduce((sum, index) => sum + packedAt(items, index).worth, 0n);
+  const worth = order.reduce((sum, index) => sum + packedAt(items, index).worth, 0);
   return {
     chosen: order.map((index) => items[index]?.id as string),
     usedMinutes: unscale(used, minuteDecimals),
@@ -116,12 +117,14 @@ function readProblem(input: AgendaFillInput): Problem {
   refuseRepeatedIds(items.map(({ id }) => id));
   const time = scaleNumbers([minutes, changeover, ...items.map((item) => item.minutes)]);
   const worth = scaleNumbers(items.map((item) => item.priority));
-  const [capacity = 0n, extra = 0n, ...sizes] = time.units;
+  const [capacity = 0, extra = 0, ...sizes] = time.units;
+  refuseInexact(time.units.reduce((sum, units) => sum + units, extra * items.length), 'minutes');
+  refuseInexact(worth.units.reduce((sum, units) => sum + units, 0), 'priority');
   return {
     items: items.map(({ id, mustHave }, i) => ({
       id,
       mustHave,
-      packed: { size: (sizes[i] as bigint) + extra, worth: worth.units[i] as bigint },
+      packed: { size: (sizes[i] as number) + extra, worth: worth.units[i] as number },
     })),
     capacity,
     minuteDecimals: time.decimals,
@@ -147,10 +150,17 @@ function readItem(value: unknown, i: number) {
 
 function requireAmount(value: unknown, field: string): number {
   const amount = requireNumber(value, field, 0, LARGEST_NUMBER);
-  if (scaleNumbers([amount]).decimals > MOST_DECIMALS) {
+  if (countDecimals(amount) > MOST_DECIMALS) {
     throw new CalcInputError(field, 'too-precise', `${field} may have ${MOST_DECIMALS} decimals at most.`);
   }
   return amount;
+}
+
+/** Sums beyond 2^53 would be rounded, and a rounded optimum is no optimum. */
+function refuseInexact(sum: number, name: string): void {
+  if (sum > Number.MAX_SAFE_INTEGER) {
+    throw new CalcInputError('items', 'too-large', `The ${name} of all items add up to too many digits.`);
+  }
 }
 
 function refuseRepeatedIds(ids: readonly string[]): void {
@@ -167,7 +177,7 @@ function packedAt(items: Problem['items'], index: number): KnapsackItem {
   return (items[index] as Problem['items'][number]).packed;
 }
 
-function cautionsOf(items: Problem['items'], capacity: bigint): string[] {
+function cautionsOf(items: Problem['items'], capacity: number): string[] {
   const tooLong = items.filter(({ packed }) => packed.size > capacity).map(({ id }) => id);
   if (tooLong.length === 0) return [];
   return [`Longer than the whole meeting, so never placed: ${tooLong.join(', ')}.`];

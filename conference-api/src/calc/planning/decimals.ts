@@ -1,37 +1,30 @@
-/** A finite number as it is written in decimal: digits · 10^−decimals, exactly. */
-interface Decimal {
-  digits: bigint;
-  decimals: number;
-}
-
 /** Numbers brought to one power of ten, so that sums and comparisons are exact. */
 export interface ScaledNumbers {
-  units: bigint[];
-  /** A unit is 10^−decimals. */
+  /** Whole units of 10^−decimals. */
+  units: number[];
   decimals: number;
 }
 
-/** Scales finite numbers ≥ 0 to whole units of their finest decimal place. */
+/** How many decimals a finite number has when written out in full. */
+export function countDecimals(number: number): number {
+  const [mantissa = '', exponent = '0'] = String(number).split('e');
+  const fraction = mantissa.split('.')[1] ?? '';
+  return Math.max(0, fraction.length - Number(exponent));
+}
+
+/** Scales finite numbers to whole units of the finest decimal place among them. */
 export function scaleNumbers(numbers: readonly number[]): ScaledNumbers {
-  const parsed = numbers.map(parseDecimal);
-  const decimals = parsed.reduce((most, number) => Math.max(most, number.decimals), 0);
-  return {
-    units: parsed.map((number) => number.digits * 10n ** BigInt(decimals - number.decimals)),
-    decimals,
-  };
+  const decimals = numbers.reduce((most, number) => Math.max(most, countDecimals(number)), 0);
+  // Multiplying would round twice; the decimal text with a shifted exponent rounds to the unit itself.
+  return { units: numbers.map((number) => shift(number, decimals)), decimals };
 }
 
 /** The number nearest to `units` · 10^−decimals. */
-export function unscale(units: bigint, decimals: number): number {
-  return Number(`${units}e-${decimals}`);
+export function unscale(units: number, decimals: number): number {
+  return shift(units, -decimals);
 }
 
-function parseDecimal(number: number): Decimal {
+function shift(number: number, places: number): number {
   const [mantissa = '0', exponent = '0'] = String(number).split('e');
-  const [whole = '0', fraction = ''] = mantissa.split('.');
-  const decimals = fraction.length - Number(exponent);
-  const digits = BigInt(whole + fraction);
-  return decimals >= 0
-    ? { digits, decimals }
-    : { digits: digits * 10n ** BigInt(-decimals), decimals: 0 };
+  return Number(`${mantissa}e${Number(exponent) + places}`);
 }

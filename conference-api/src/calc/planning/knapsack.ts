@@ -1,111 +1,141 @@
-/** One thing to pack: whole, non-negative size and worth. */
+/** One thing to pack; size and worth are whole, non-negative, and add up to safe integers. */
 export interface KnapsackItem {
-  size: bigint;
-  worth: bigint;
+  size: number;
+  worth: number;
 }
 
 export interface KnapsackOptimum {
   /** Indices of the chosen items, ascending. */
   chosen: number[];
-  size: bigint;
-  worth: bigint;
+  size: number;
+  worth: number;
 }
 
-/** One way to pack the items looked at so far; items form a linked list. */
-interface State {
-  size: bigint;
-  worth: bigint;
-  index: number;
-  rest: State | null;
+/** Ways to pack the items looked at so far, ascending in size and in worth. */
+interface Front {
+  sizes: number[];
+  worths: number[];
+  /** Where each way's choices begin in the trail; 0 for nothing chosen. */
+  trails: number[];
 }
 
-const EMPTY: State = { size: 0n, worth: 0n, index: -1, rest: null };
-const MOST_STATES = 1_000_000;
+/** Choices as linked lists: an item, and the entry that lists the later ones. */
+interface Trail {
+  item: number[];
+  next: number[];
+}
+
+interface Prepared {
+  items: readonly KnapsackItem[];
+  capacity: number;
+  /** Indices of the items that fit at all, densest first. */
+  dense: readonly number[];
+}
+
+const MOST_STATES = 4_000_000;
 
 /**
  * The exact optimum of the 0/1 knapsack: most worth; then least size; then the
  * earlier items (at the first index where two answers differ, the one that has
- * that item). Null when the search would need more than a million states.
+ * that item). Null when the search would need more than four million states.
  *
- * Works on the Pareto front of (size, worth), from the last item to the first so
- * that ties fall to earlier items, and drops states that cannot reach the best
- * answer known (Nemhauser GL, Ullmann Z. Manage Sci 1969;15:494, with the bound of
- * Dantzig GB. Oper Res 1957;5:266).
+ * Works on the Pareto front of size and worth, from the last item to the first so
+ * that ties fall to earlier items, and drops ways that cannot reach a worth known
+ * to be reachable (Nemhauser GL, Ullmann Z. Manage Sci 1969;15:494, with the bound
+ * of Dantzig GB. Oper Res 1957;5:266).
  */
-export function solveKnapsack(items: readonly KnapsackItem[], capacity: bigint): KnapsackOptimum | null {
-  const fitting = items.map((item) => item.size <= capacity);
-  const atLeast = greedyWorth(items.filter((_, i) => fitting[i]), capacity);
-  let front: State[] = [EMPTY];
+export function solveKnapsack(items: readonly KnapsackItem[], capacity: number): KnapsackOptimum | null {
+  const fitting = items.map((_, index) => index).filter((index) => sizeOf(items, index) <= capacity);
+  const dense = [...fitting].sort((a, b) => byDensity(items[a] as KnapsackItem, items[b] as KnapsackItem));
+  const prepared: Prepared = { items, capacity, dense };
+  const reachable = greedyWorth(prepared);
+  const trail: Trail = { item: [-1], next: [0] };
+  let front: Front = { sizes: [0], worths: [0], trails: [0] };
   let states = 0;
-  for (let index = items.length - 1; index >= 0; index -= 1) {
-    if (!fitting[index]) continue;
-    const earlier = items.slice(0, index).filter((_, i) => fitting[i]);
-    const bound = upperBound(earlier, capacity);
-    const widened = mergeWith(items[index] as KnapsackItem, index, front, capacity);
-    front = widened.filter((state) => bound(state) >= Number(atLeast) * (1 - 1e-9));
-    states += widened.length;
+  for (const index of fitting.reverse()) {
+    front = dropHopeless(merge(prepared, index, front, trail), prepared, index, reachable);
+    states += front.sizes.length;
     if (states > MOST_STATES) return null;
   }
-  const best = front.at(-1) as State;
-  return { chosen: indicesOf(best), size: best.size, worth: best.worth };
+  const last = front.sizes.length - 1;
+  return {
+    chosen: follow(trail, front.trails[last] as number),
+    size: front.sizes[last] as number,
+    worth: front.worths[last] as number,
+  };
 }
 
-/** The front with and without one more item, both ascending in size and in worth. */
-function mergeWith(item: KnapsackItem, index: number, front: readonly State[], capacity: bigint): State[] {
-  const merged: State[] = [];
-  const keep = (state: State) => {
-    const last = merged.at(-1);
-    if (last === undefined || state.worth > last.worth) merged.push(state);
-  };
-  let next = 0;
-  for (const state of front) {
-    const size = state.size + item.size;
-    if (size > capacity) break;
-    const worth = state.worth + item.worth;
-    while (next < front.length && comesFirst(front[next] as State, size, worth)) {
-      keep(front[next] as State);
-      next += 1;
+/** The front with and without one more item; of ways alike in both, the one with the item. */
+function merge({ items, capacity }: Prepared, index: number, front: Front, trail: Trail): Front {
+  const { size, worth } = items[index] as KnapsackItem;
+  const merged: Front = { sizes: [], worths: [], trails: [] };
+  let best = -1;
+  let without = 0;
+  const keepSmaller = (withSize: number, withWorth: number) => {
+    for (; without < front.sizes.length; without += 1) {
+      const ownSize = front.sizes[without] as number;
+      const ownWorth = front.worths[without] as number;
+      if (ownSize > withSize || (ownSize === withSize && ownWorth <= withWorth)) return;
+      if (ownWorth > best) best = push(merged, ownSize, ownWorth, front.trails[without] as number);
     }
-    keep({ size, worth, index, rest: state });
+  };
+  for (let at = 0; at < front.sizes.length; at += 1) {
+    const withSize = (front.sizes[at] as number) + size;
+    if (withSize > capacity) break;
+    const withWorth = (front.worths[at] as number) + worth;
+    keepSmaller(withSize, withWorth);
+    if (withWorth > best) {
+      trail.item.push(index);
+      trail.next.push(front.trails[at] as number);
+      best = push(merged, withSize, withWorth, trail.item.length - 1);
+    }
   }
-  for (; next < front.length; next += 1) keep(front[next] as State);
+  keepSmaller(Infinity, Infinity);
   return merged;
 }
 
-/** Smaller first; at one size the worthier; alike in both, the state with the new item. */
-function comesFirst(state: State, size: bigint, worth: bigint): boolean {
-  return state.size < size || (state.size === size && state.worth > worth);
+function push(front: Front, size: number, worth: number, trail: number): number {
+  front.sizes.push(size);
+  front.worths.push(worth);
+  front.trails.push(trail);
+  return worth;
 }
 
-/** Most worth a state could reach with the items not yet looked at, were they divisible. */
-function upperBound(items: readonly KnapsackItem[], capacity: bigint): (state: State) => number {
-  const sizes = [0];
-  const worths = [0];
-  for (const item of byDensity(items)) {
-    sizes.push((sizes.at(-1) as number) + Number(item.size));
-    worths.push((worths.at(-1) as number) + Number(item.worth));
-  }
-  return (state) => {
-    const room = Number(capacity - state.size);
-    let low = 0;
-    let high = sizes.length - 1;
-    while (low < high) {
-      const middle = Math.ceil((low + high) / 2);
-      if ((sizes[middle] as number) <= room) low = middle;
-      else high = middle - 1;
+/**
+ * Drops the ways that could not reach `reachable` even if the items before `index`
+ * were divisible. Those that could just reach it stay, since ties are still open.
+ */
+function dropHopeless(front: Front, { items, capacity, dense }: Prepared, index: number, reachable: number): Front {
+  const earlier = dense.filter((other) => other < index).map((other) => items[other] as KnapsackItem);
+  const kept: Front = { sizes: [], worths: [], trails: [] };
+  // Room shrinks along the front, so the first item that no longer fits moves back only.
+  let filled = earlier.length;
+  let fillSize = earlier.reduce((sum, item) => sum + item.size, 0);
+  let fillWorth = earlier.reduce((sum, item) => sum + item.worth, 0);
+  for (let at = 0; at < front.sizes.length; at += 1) {
+    const room = capacity - (front.sizes[at] as number);
+    while (fillSize > room) {
+      filled -= 1;
+      fillSize -= (earlier[filled] as KnapsackItem).size;
+      fillWorth -= (earlier[filled] as KnapsackItem).worth;
     }
-    const full = Number(state.worth) + (worths[low] as number);
-    if (low === sizes.length - 1) return full;
-    const share = (room - (sizes[low] as number)) / ((sizes[low + 1] as number) - (sizes[low] as number));
-    return full + share * ((worths[low + 1] as number) - (worths[low] as number));
-  };
+    const part = earlier[filled];
+    const rest = part === undefined ? 0 : ((room - fillSize) * part.worth) / part.size;
+    const worth = front.worths[at] as number;
+    // The slack covers rounding in the division.
+    if ((worth + fillWorth + rest) * (1 + 1e-12) >= reachable) {
+      push(kept, front.sizes[at] as number, worth, front.trails[at] as number);
+    }
+  }
+  return kept;
 }
 
-/** A worth that is surely reachable, to drop hopeless states early. */
-function greedyWorth(items: readonly KnapsackItem[], capacity: bigint): bigint {
+/** A worth that is surely reachable, to drop hopeless ways early. */
+function greedyWorth({ items, capacity, dense }: Prepared): number {
   let room = capacity;
-  let worth = 0n;
-  for (const item of byDensity(items)) {
+  let worth = 0;
+  for (const index of dense) {
+    const item = items[index] as KnapsackItem;
     if (item.size > room) continue;
     room -= item.size;
     worth += item.worth;
@@ -113,16 +143,19 @@ function greedyWorth(items: readonly KnapsackItem[], capacity: bigint): bigint {
   return worth;
 }
 
-function byDensity(items: readonly KnapsackItem[]): KnapsackItem[] {
-  return [...items].sort((a, b) => {
-    const difference = b.worth * a.size - a.worth * b.size;
-    if (difference !== 0n) return difference > 0n ? 1 : -1;
-    return a.size < b.size ? -1 : Number(a.size > b.size);
-  });
+/** Most worth per size first (things without size before all), then smaller first. */
+function byDensity(a: KnapsackItem, b: KnapsackItem): number {
+  const density = ({ size, worth }: KnapsackItem) => (size === 0 ? Infinity : worth / size);
+  if (density(a) !== density(b)) return density(b) > density(a) ? 1 : -1;
+  return a.size - b.size;
 }
 
-function indicesOf(state: State): number[] {
+function follow(trail: Trail, start: number): number[] {
   const indices: number[] = [];
-  for (let at: State | null = state; at !== null && at.index >= 0; at = at.rest) indices.push(at.index);
+  for (let at = start; at > 0; at = trail.next[at] as number) indices.push(trail.item[at] as number);
   return indices;
+}
+
+function sizeOf(items: readonly KnapsackItem[], index: number): number {
+  return (items[index] as KnapsackItem).size;
 }
