@@ -1,4 +1,6 @@
-import { Module } from '@nestjs/common';
+import { Global, Module } from '@nestjs/common';
+import { StorageService } from './storage.service.js';
 
-@Module({})
+@Global()
+@Module({ providers: [StorageService], exports: [StorageService] })
 export class StorageModule {}
