@@ -1,4 +1,5 @@
 import { stopCommands } from './processes.mjs';
+import { stepsAreStopping } from './steps.mjs';
 
 /** Thrown into whatever is under way once the program was asked to stop. */
 export class Stopped extends Error {}
@@ -47,6 +48,7 @@ export function createLifecycle() {
         // npm passes on a Ctrl-C that the terminal has already sent: the second one changes nothing.
         if (interrupted) return;
         interrupted = true;
+        stepsAreStopping();
         announce(signal);
         await stop();
         process.exit(code);

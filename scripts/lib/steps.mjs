@@ -1,3 +1,10 @@
+let stopping = false;
+
+/** From now on a step that does not come to its end was stopped, not failed. */
+export function stepsAreStopping() {
+  stopping = true;
+}
+
 /** Runs `work` and prints one line for it: the title, what came of it, the time it took. */
 export async function step(title, work) {
   const started = performance.now();
@@ -7,7 +14,7 @@ export async function step(title, work) {
     process.stdout.write(`${typeof outcome === 'string' ? `${outcome}, ` : ''}${seconds(started)}\n`);
     return outcome;
   } catch (error) {
-    process.stdout.write(`failed after ${seconds(started)}\n`);
+    process.stdout.write(`${stopping ? 'stopped' : 'failed'} after ${seconds(started)}\n`);
     throw error;
   }
 }
