@@ -145,7 +145,7 @@ export function expose(sheet, spec) {
   const { width, height } = sheet;
   const film = detect(sheet, spec);
   const lateral = spec.projection === 'lateral';
-  const { even = lateral ? 0.86 : 0.62, emphasis = 0.55, level = lateral ? 0.56 : 0.3 } = spec.exposure;
+  const { even = lateral ? 0.86 : 0.62, emphasis = 0.55, level = lateral ? 0.47 : 0.3 } = spec.exposure;
   const small = shrink(sheet.tissue, width, height);
   for (let i = 0; i < small.data.length; i++) small.data[i] = clamp(small.data[i], 1.2, 8.5);
   const base = rowsOf({ ...small, data: blur(small.data, small.w, small.h, 9) }, width);

@@ -163,3 +163,15 @@ export function addStem(sheet, { stem, head }, frame, brokenFrame) {
 export function addHead(sheet, head, centre) {
   addMetal(sheet, sphere(sheet.camera, centre, head.diameterMm / 2), METAL[head.material ?? 'cobalt']);
 }
+
+/** Cables round the shaft at heights of the femur's own axes, each with its crimp. */
+export function addCables(sheet, heights, frame) {
+  for (const y of heights) {
+    const half = y > -75 ? 16.5 : 14.6;
+    const middle = frame.toPatient([42, y, 0]);
+    const tilted = unit(add(frame.down, scale(frame.lateral, 0.06)));
+    addWire(sheet, circlePoints(middle, tilted, half, 48), 0.85, MU.cobalt * 0.7);
+    const crimp = frame.toPatient([42 + half + 0.8, y, 2]);
+    addMetal(sheet, frustum(sheet.camera, add(crimp, scale(frame.down, -4)), add(crimp, scale(frame.down, 4)), 2.2, 2.2), MU.cobalt * 0.7);
+  }
+}

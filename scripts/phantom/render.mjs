@@ -3,7 +3,7 @@
 import { addBody, addHemipelvis, addSpine, HIP, socket } from './anatomy.mjs';
 import { expose } from './exposure.mjs';
 import { addFemur } from './femur.mjs';
-import { addCup, addHead, addStem } from './implants.mjs';
+import { addCables, addCup, addHead, addStem } from './implants.mjs';
 import { addLateral } from './lateral.mjs';
 import { burnIn, leadMarker } from './letters.mjs';
 import { makeSheet } from './raster.mjs';
@@ -62,6 +62,7 @@ export function drawRadiograph(input) {
   addCup(sheet, spec, scene.cup, scene.opening, scene.screws);
   const { tip } = addStem(sheet, spec, scene.femur.stem, scene.broken);
   addHead(sheet, spec.head, scene.headCentre);
+  addCables(sheet, spec.cablesAtMm ?? [], scene.femur.bone);
   leadMarker(sheet, spec);
   const pixels = expose(sheet, spec);
   const truth = { ...truthOf(spec, scene), burnedIn: burnIn(pixels, spec) };

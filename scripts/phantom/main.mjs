@@ -1,0 +1,35 @@
+// node scripts/phantom/main.mjs --out DIR [--only PART] [--planted]
+// Draws the demo's images as DICOM and PNG, with the truth of each beside it as JSON.
+
+import { mkdir, writeFile } from 'node:fs/promises';
+import { basename, join } from 'node:path';
+import { parseArgs } from 'node:util';
+import { demoImages } from './demo-images.mjs';
+import { PLANTED, toDicom } from './dicom.mjs';
+import { toPng } from './png.mjs';
+import { drawRadiograph } from './render.mjs';
+
+const BURNED_IN = ['QUILLFEATHER TAMSIN', 'QF-7730142  23/06/1951', 'PLUMWICK GENERAL 12/03/2021'];
+
+async function writeOne(entry, out, planted) {
+  const name = basename(entry.fileName, '.dcm');
+  const image = drawRadiograph({ ...entry.spec, burnedIn: planted ? BURNED_IN : [] });
+  const meta = { name, study: `${entry.caseKey} ${entry.interval}` };
+  if (planted) Object.assign(meta, { identifiers: PLANTED, privateTag: true });
+  await writeFile(join(out, `${name}.dcm`), toDicom(image, meta));
+  await writeFile(join(out, `${name}.png`), await toPng(image));
+  await writeFile(join(out, `${name}.json`), `${JSON.stringify({ ...entry, spec: undefined, truth: image.truth }, null, 2)}\n`);
+}
+
+const { values } = parseArgs({
+  options: { out: { type: 'string' }, only: { type: 'string' }, planted: { type: 'boolean', default: false } },
+});
+if (!values.out) {
+  console.error('Usage: node scripts/phantom/main.mjs --out DIR [--only PART] [--planted]');
+  process.exit(2);
+}
+await mkdir(values.out, { recursive: true });
+const chosen = demoImages().filter((e) => !values.only || e.fileName.includes(values.only));
+const start = Date.now();
+for (const entry of chosen) await writeOne(entry, values.out, values.planted);
+console.log(`${chosen.length} images in ${((Date.now() - start) / 1000).toFixed(1)} s, ${values.out}`);
