@@ -43,11 +43,16 @@ export class Bench {
     await rm(this.dataDir, { recursive: true, force: true });
   }
 
-  /** Sends with nodemailer, an SMTP client from outside the project. */
-  async send(mail: SendMailOptions, options: object = {}): Promise<void> {
-    const transport = createTransport({ host: '127.0.0.1', port: this.smtpPort, secure: false, ...options });
+  /** Sends with nodemailer, an SMTP client from outside the project; several over one connection, in order. */
+  async send(mail: SendMailOptions | SendMailOptions[], options: object = {}): Promise<void> {
+    const settings = { host: '127.0.0.1', port: this.smtpPort, secure: false, ...options };
+    const transport = Array.isArray(mail)
+      ? createTransport({ ...settings, pool: true, maxConnections: 1 })
+      : createTransport(settings);
     try {
-      await transport.sendMail({ from: 'sender@clinic.example', ...mail });
+      for (const one of [mail].flat()) {
+        await transport.sendMail({ from: 'sender@clinic.example', ...one });
+      }
     } finally {
       transport.close();
     }
