@@ -19,11 +19,12 @@ const MOST_DISTINCT_VALUES = 2000;
 /** Keeps the squares of differences finite. */
 const LARGEST_VALUE = 1e100;
 
-/** One unit's pairable values: distinct ones by index into `values`, with their counts. */
+/** One unit's pairable values: indices of the distinct ones into `values`, and how often each. */
 export interface UnitCounts {
   /** How many raters gave a value (two or more). */
   size: number;
-  counts: readonly (readonly [valueIndex: number, count: number])[];
+  indices: readonly number[];
+  counts: readonly number[];
 }
 
 export interface PairableUnits {
@@ -110,15 +111,18 @@ function pairableUnits(data: (number | null)[][]): PairableUnits {
       const index = indexOf.get(value) as number;
       counts.set(index, (counts.get(index) ?? 0) + 1);
     }
-    return { size: column.length, counts: [...counts] };
+    return { size: column.length, indices: [...counts.keys()], counts: [...counts.values()] };
   });
   return { values, units };
 }
 
 function totalsOf(valueCount: number, units: readonly UnitCounts[]): number[] {
   const totals = new Array<number>(valueCount).fill(0);
-  for (const unit of units) {
-    for (const [value, count] of unit.counts) totals[value] = (totals[value] as number) + count;
+  // Plain loops here and below: the bootstrap runs them millions of times.
+  for (const { indices, counts } of units) {
+    for (let i = 0; i < indices.length; i += 1) {
+      totals[indices[i] as number] = (totals[indices[i] as number] as number) + (counts[i] as number);
+    }
   }
   return totals;
 }
@@ -128,14 +132,15 @@ function observedDisagreement(
   difference: (c: number, k: number) => number,
 ): number {
   let sum = 0;
-  for (const { size, counts } of units) {
+  for (const { size, indices, counts } of units) {
     let pairs = 0;
-    for (const [c, countC] of counts) {
-      for (const [k, countK] of counts) {
-        if (c < k) pairs += 2 * countC * countK * difference(c, k);
+    for (let i = 1; i < indices.length; i += 1) {
+      for (let j = 0; j < i; j += 1) {
+        const product = (counts[i] as number) * (counts[j] as number);
+        pairs += product * difference(indices[i] as number, indices[j] as number);
       }
     }
-    sum += pairs / (size - 1);
+    sum += (2 * pairs) / (size - 1);
   }
   return sum;
 }
