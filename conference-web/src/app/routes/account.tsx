@@ -1,0 +1,5 @@
+import { Page } from '@/components/page';
+
+export function Component() {
+  return <Page title="Account" heading="Account" />;
+}

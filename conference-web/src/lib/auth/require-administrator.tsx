@@ -1,0 +1,8 @@
+import { Outlet } from 'react-router-dom';
+import { NoPermission } from '@/components/page-states';
+import { useMe } from './session';
+
+export function RequireAdministrator() {
+  if (!useMe().isAdministrator) return <NoPermission>This page is for the administrators of this installation.</NoPermission>;
+  return <Outlet />;
+}

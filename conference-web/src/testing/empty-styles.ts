@@ -1,0 +1,2 @@
+/** Stands for every style sheet in unit tests. */
+export default {} as Record<string, string>;
