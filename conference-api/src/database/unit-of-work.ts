@@ -1,12 +1,17 @@
 import { Injectable } from '@nestjs/common';
 import { randomUUID } from 'node:crypto';
 import { DataSource, type EntityManager } from 'typeorm';
-import type { Actor } from '../access/actor.js';
 import { AuditEntry } from '../audit/entities/audit-entry.entity.js';
 import type { LiveEventKind } from '../calc/vocabulary/events.js';
 import { LiveEvent } from '../events/entities/live-event.entity.js';
 import { OutboxMail } from '../mail/entities/outbox-mail.entity.js';
 import { isDeadlock } from './database-errors.js';
+
+/** Who acts, and from where; nobody yet where someone is about to sign in. An `Actor` is one. */
+export interface ActingPerson {
+  personId: string | null;
+  address: string;
+}
 
 export interface AuditFacts {
   action: string;
@@ -42,7 +47,7 @@ export class Transaction {
 
   constructor(
     readonly manager: EntityManager,
-    private readonly actor: Pick<Actor, 'personId' | 'address'> | null,
+    private readonly actor: ActingPerson | null,
   ) {}
 
   async audit(facts: AuditFacts): Promise<void> {
@@ -102,7 +107,7 @@ export class UnitOfWork {
   constructor(private readonly dataSource: DataSource) {}
 
   /** Runs a use case in one transaction, again from the start where it met another one. */
-  async run<T>(actor: Pick<Actor, 'personId' | 'address'> | null, work: (transaction: Transaction) => Promise<T>): Promise<T> {
+  async run<T>(actor: ActingPerson | null, work: (transaction: Transaction) => Promise<T>): Promise<T> {
     for (let attempt = 1; ; attempt++) {
       try {
         return await this.dataSource.transaction('READ COMMITTED', (manager) => work(new Transaction(manager, actor)));

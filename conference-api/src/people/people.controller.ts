@@ -5,6 +5,7 @@ import { Permission } from '../access/permission.js';
 import { CurrentActor } from '../common/decorators/current-actor.decorator.js';
 import { RequirePermission, SignedIn } from '../common/decorators/route-access.decorator.js';
 import { InvitePersonDto, ListPeopleDto, PersonDto, PersonListDto, UnitDto, UnitListDto, UpdatePersonDto, WriteUnitDto } from './dto/people.dto.js';
+import { PeopleInvitationsService } from './people-invitations.service.js';
 import { PeopleService } from './people.service.js';
 import { UnitsService } from './units.service.js';
 
@@ -13,6 +14,7 @@ import { UnitsService } from './units.service.js';
 export class PeopleController {
   constructor(
     private readonly people: PeopleService,
+    private readonly invitations: PeopleInvitationsService,
     private readonly units: UnitsService,
   ) {}
 
@@ -26,7 +28,7 @@ export class PeopleController {
   @Post('people/invitations')
   @RequirePermission(Permission.PeopleManage)
   invite(@CurrentActor() actor: Actor, @Body() body: InvitePersonDto): Promise<PersonDto> {
-    return this.people.invite(actor, body);
+    return this.invitations.invite(actor, body);
   }
 
   @Get('people/:id')
@@ -46,7 +48,7 @@ export class PeopleController {
   @HttpCode(204)
   @RequirePermission(Permission.PeopleManage)
   inviteAgain(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string): Promise<void> {
-    return this.people.inviteAgain(actor, id);
+    return this.invitations.inviteAgain(actor, id);
   }
 
   @Get('units')
