@@ -1,119 +1,107 @@
 import { isAmbiguousMonth, isDayAndMonth, isDayOfMonth, isLikelyYear, monthOfWord } from './calendar.js';
-import { markOf } from './finding.js';
-import type { Detector, FindingStrength, Mark } from './finding.js';
-
-// Every quantifier below is bounded, so that no text can make a pattern run away.
+import type { Detector, FindingStrength } from './finding.js';
+import { isPrecededBy, markAfter, markMatches } from './scanning.js';
+import type { Judge } from './scanning.js';
 
 const TIME = String.raw`(?:[T ,]{1,2}\d{1,2}:?\d{2}(?::?\d{2}(?:\.\d{1,6})?)?(?:Z|[+-]\d{2}:?\d{2})?(?!\d))?`;
-const YEAR_FIRST = new RegExp(String.raw`(?<![\d.])(\d{4})([-/.])(\d{1,2})\2(\d{1,2})(?![\d]|[-/.]\d)${TIME}`, 'g');
-const YEAR_LAST = /(?<![\d/]|\d[.-])(\d{1,2}) ?([-/.]) ?(\d{1,2}) ?\2 ?(\d{4}|\d{2})(?![\d/]|[-.]\d)/g;
-const SPACED = /(?<!\d|\d[ .,/-])(\d{2}) (\d{2}) (\d{4})(?![\d/]|[ .,-]\d)/g;
+const YEAR_FIRST = new RegExp(String.raw`(?<![\d.])(\d{4})([-/.])(\d{1,2})\2(\d{1,2})(?!\d|\2\d)${TIME}`, 'g');
+const yearLast = (separator: string) =>
+  new RegExp(
+    String.raw`(?<!\d|\d${separator} ?)(\d{1,2}) ?${separator} ?(\d{1,2}) ?${separator} ?(\d{4}|\d{2})(?!\d|${separator}\d)`,
+    'g',
+  );
+const SLASHES = yearLast('/');
+const HYPHENS = yearLast('-');
+const DOTS = yearLast(String.raw`\.`);
+const SPACED = /(?<!\d|\d[ .,/-])(\d{2}) (\d{2}) (\d{4})(?!\d|[ .,/-]\d)/g;
 const COMPACT = /(?<![\d.])(\d{4})(\d{2})(\d{2})(T\d{2}(?:\d{2}){0,2}Z?)?(?!\d)/g;
 const COMPACT_DAY_FIRST = /(?<![\d.])(\d{2})(\d{2})((?:19|20)\d{2})(?!\d)/g;
-const MONTH_YEAR_DIGITS = /(?<![\d/.-])(0?[1-9]|1[0-2])([/.-])((?:19|20)\d{2})(?![\d/]|[-.]\d)/g;
-const YEAR_MONTH_DIGITS = /(?<![\d/.-])((?:19|20)\d{2})-(0[1-9]|1[0-2])(?![\d/]|[-.]\d)/g;
-const DAY_MONTH_AFTER_ON = /\b(?:on|dated|seen|admitted|since|until|date)[ :]{1,2}(?<value>0[1-9]\/\d{2}|\d{2}\/0[1-9])(?![\d/]|[.-]\d)/gi;
+const MONTH_SLASH_YEAR = /(?<![\d/.-])(?:0?[1-9]|1[0-2])\/(?:19|20)\d{2}(?![\d/])/g;
+const MONTH_HYPHEN_YEAR = /(?<![\d/.-])(?:0[1-9]|1[0-2])-(?:19|20)\d{2}(?![\d-])/g;
+const YEAR_MONTH = /(?<![\d/.-])(?:19|20)\d{2}-(?:0[1-9]|1[0-2])(?![\d/]|-\d)/g;
+const SAID_DAY = /\b(?:on|dated|seen|admitted|since|until|date)[ :]{1,2}/gi;
+const DAY_MONTH = /(0[1-9]\/\d{2}|\d{2}\/0[1-9])(?![\d/]|[.-]\d)/y;
+const VERSION_BEFORE = /(?:\bv|\bver|version|release|software|firmware|build|dicom|standard|\biso|revision)[ .:]{0,2}$/i;
 
-const DAY = String.raw`\d{1,2}(?:st|nd|rd|th|er|\.)?`;
 const WORD = String.raw`\p{L}{3,10}\.?`;
-const TO = String.raw`(?: |-|/| of | de | di |, | the ){1,2}`;
-const DAY_WORD_YEAR = new RegExp(
-  String.raw`(?<![\d.,/\p{L}-])(?<day>${DAY})(?: (?:of|de) |[ -]|/|\. ?)?(?<month>${WORD})(?:(?:, ?| de | del |[ -]|/)?'?(?<year>(?:19|20)\d{2}|\d{2})(?![\d:/%]|[.,-]\d| ?(?:mm|cm|mg|ml|years?|weeks?|days?|hours?)\b))?(?![\p{L}])`,
+const UNIT = String.raw` ?(?:mm|cm|mg|ml|kg|years?|weeks?|months?|days?|hours?|patients?|hips?|°|%)(?!\p{L})`;
+const DAY_WORD = new RegExp(
+  String.raw`(?<![\d\p{L}]|\d[.,/])(?<day>\d{1,2})(?<ordinal>st|nd|rd|th|er|\.)?(?: (?:of|de) |[ -]|/)?(?<month>${WORD})` +
+    String.raw`(?:(?:, ?| de | del |[ -]|/)?'?(?<year>(?:19|20)\d{2}|\d{2})(?![\d:/%]|[.,-]\d|${UNIT}))?(?!\p{L})`,
   'gu',
 );
-const WORD_DAY_YEAR = new RegExp(
-  String.raw`(?<![\p{L}\d])(?<month>${WORD})(?:${TO})?(?<day>\d{1,2})(?<ordinal>st|nd|rd|th)?(?![\d:/%]|[.,-]\d)(?:(?:, ?| )'?(?<year>(?:19|20)\d{2})(?!\d))?(?! ?(?:mm|cm|mg|ml|kg|years?|weeks?|days?|patients?|hips?)\b)`,
+const WORD_DAY = new RegExp(
+  String.raw`(?<![\p{L}\d])(?<month>${WORD})(?:[ -]|/|, | the )?(?<day>\d{1,2})(?<ordinal>st|nd|rd|th)?(?![\d:/%]|[.,-]\d|${UNIT})` +
+    String.raw`(?:(?:, ?| )'?(?<year>(?:19|20)\d{2})(?!\d))?`,
   'gu',
 );
 const WORD_YEAR = new RegExp(
   String.raw`(?<![\p{L}\d])(?<month>${WORD})(?:,? (?:of |de |del )?|[-/])'?(?<year>(?:19|20)\d{2})(?!\d)`,
   'gu',
 );
-const SEASON_YEAR = /\b(?:spring|summer|autumn|fall|winter|easter|christmas|new year|whitsun|ramadan|printemps|été|automne|hiver)(?: of|,)? ((?:19|20)\d{2})\b/gi;
-const WEEK = /\b(?:(?:week|wk)\.? \d{1,2}(?:,| of)? (?:19|20)\d{2}|(?:19|20)\d{2}-?W\d{2}(?:-?\d)?|(?:Q[1-4]|first quarter|second quarter|third quarter|fourth quarter)(?: of|,)? ?(?:19|20)\d{2})\b/gi;
-const WEEKDAY_DAY = /\b(?:mon|tues?|wed(?:nes)?|thu(?:rs)?|fri|sat(?:ur)?|sun)(?:day)?,? (?:the )?\d{1,2}(?:st|nd|rd|th)\b/gi;
-const VERSION_BEFORE = /(?:\bv|\bver|version|release|software|firmware|build|dicom|standard|iso|protocol|node|rev(?:ision)?)[ .:]{0,2}$/i;
+const SEASON_YEAR =
+  /(?<!\p{L})(?:spring|summer|autumn|fall|winter|easter|christmas|new year|whitsun|ramadan|printemps|été|automne|hiver)(?: of|,)? (?:19|20)\d{2}(?!\d)/giu;
+const WEEK_YEAR = /\b(?:week|wk)\.? \d{1,2}(?:,| of)? (?:19|20)\d{2}\b|\b(?:19|20)\d{2}-?W\d{2}(?:-?\d)?\b/gi;
+const QUARTER_YEAR = /\b(?:Q[1-4]|(?:first|second|third|fourth) quarter)(?: of|,)? ?(?:19|20)\d{2}\b/gi;
+const WEEKDAY_DAY =
+  /\b(?:mon|tues?|wed(?:nes)?|thu(?:rs)?|fri|sat(?:ur)?|sun)(?:day)?,? (?:the )?\d{1,2}(?:st|nd|rd|th)\b/gi;
 
-/** Calendar dates; an interval or a year alone is none. */
+/** Calendar dates. An interval ('3 days after surgery') or a year alone is none. */
 export const findDates: Detector = (text) => [
-  ...fromDigits(text),
-  ...fromWords(text),
-  ...[SEASON_YEAR, WEEK, WEEKDAY_DAY].flatMap((pattern) =>
-    [...text.matchAll(pattern)].map((match) => markOf(match, 'date', 'likely')),
+  ...markMatches(text, 'date', YEAR_FIRST, ([, y, , a, b]) => validDate(y, a, b, 'certain')),
+  ...[SLASHES, HYPHENS, DOTS].flatMap((pattern) => markMatches(text, 'date', pattern, judgeYearLast)),
+  ...markMatches(text, 'date', SPACED, ([, a, b, y]) => validDate(y, a, b, 'likely')),
+  ...markMatches(text, 'date', COMPACT, judgeCompact),
+  ...markMatches(text, 'date', COMPACT_DAY_FIRST, ([, a, b, y]) => validDate(y, a, b, 'possible')),
+  ...markMatches(text, 'date', MONTH_SLASH_YEAR, 'likely'),
+  ...markMatches(text, 'date', MONTH_HYPHEN_YEAR, 'possible'),
+  ...markMatches(text, 'date', YEAR_MONTH, unlessVersion('possible')),
+  ...markAfter(text, 'date', { label: SAID_DAY, value: DAY_MONTH }, judgeDayMonth),
+  ...[DAY_WORD, WORD_DAY, WORD_YEAR].flatMap((pattern) => markMatches(text, 'date', pattern, judgeMonthWord)),
+  ...[SEASON_YEAR, WEEK_YEAR, QUARTER_YEAR, WEEKDAY_DAY].flatMap((pattern) =>
+    markMatches(text, 'date', pattern, 'likely'),
   ),
 ];
 
-function fromDigits(text: string): Mark[] {
-  return [
-    ...matches(text, YEAR_FIRST, ([, y, , m, d]) => validYmd(y, m, d, 'certain')),
-    ...matches(text, YEAR_LAST, yearLast),
-    ...matches(text, SPACED, ([, a, b, y]) => validYmd(y, a, b, 'likely')),
-    ...matches(text, COMPACT, ([, y, m, d, time]) =>
-      Number(y) >= 1900 && isDayOfMonth(Number(d), Number(m)) && isLikelyYear(Number(y))
-        ? time === undefined ? 'likely' : 'certain'
-        : null,
-    ),
-    ...matches(text, COMPACT_DAY_FIRST, ([, a, b, y]) => validYmd(y, a, b, 'possible')),
-    ...matches(text, MONTH_YEAR_DIGITS, () => 'likely'),
-    ...matches(text, YEAR_MONTH_DIGITS, () => 'possible'),
-    ...matches(text, DAY_MONTH_AFTER_ON, ({ groups }) => {
-      const [a, b] = (groups?.value ?? '').split('/').map(Number);
-      return isDayAndMonth(a ?? 0, b ?? 0) ? 'possible' : null;
-    }),
-  ];
+function validDate(
+  year: string | undefined,
+  a: string | undefined,
+  b: string | undefined,
+  strength: FindingStrength,
+): FindingStrength | null {
+  return isLikelyYear(Number(year)) && isDayAndMonth(Number(a), Number(b)) ? strength : null;
 }
 
-function yearLast(match: RegExpMatchArray): FindingStrength | null {
-  const [whole, a, separator, b, year] = match;
-  if (!isDayAndMonth(Number(a), Number(b))) return null;
-  if (year?.length === 4) return isLikelyYear(Number(year)) ? 'certain' : null;
-  if (/ /.test(whole)) return null;
-  // Two-digit years with dots also look like versions, so they count less.
-  if (separator === '.' && !(a?.length === 2 && b?.length === 2)) return 'possible';
-  return 'likely';
-}
+const judgeYearLast: Judge = (match, text) => {
+  const [whole, a = '', b = '', year = ''] = match;
+  if (year.length === 4) return validDate(year, a, b, 'certain');
+  if (whole.includes(' ') || !isDayAndMonth(Number(a), Number(b))) return null;
+  if (!whole.includes('.')) return 'likely';
+  // 1.12.20 is more often a version than a date, 01.12.20 the other way round.
+  return unlessVersion(a.length === 2 && b.length === 2 ? 'likely' : 'possible')(match, text);
+};
 
-function validYmd(y?: string, a?: string, b?: string, strength: FindingStrength = 'certain'): FindingStrength | null {
-  return isLikelyYear(Number(y)) && isDayAndMonth(Number(a), Number(b)) ? strength : null;
-}
+const unlessVersion =
+  (strength: FindingStrength): Judge =>
+  (match, text) =>
+    isPrecededBy(text, match.index ?? 0, VERSION_BEFORE, 16) ? null : strength;
 
-function fromWords(text: string): Mark[] {
-  return [
-    ...matches(text, DAY_WORD_YEAR, ({ groups }) => ofMonthWord(groups)),
-    ...matches(text, WORD_DAY_YEAR, ({ groups }) => {
-      const strength = ofMonthWord(groups);
-      return strength === 'certain' || groups?.ordinal !== undefined || isCapital(groups?.month) ? strength : null;
-    }),
-    ...matches(text, WORD_YEAR, ({ groups }) => ofMonthWord(groups)),
-  ];
-}
+const judgeCompact: Judge = ([, year, month, day, time]) => {
+  if (!isLikelyYear(Number(year)) || !isDayOfMonth(Number(day), Number(month))) return null;
+  return time === undefined ? 'likely' : 'certain';
+};
 
-function ofMonthWord(groups: Record<string, string | undefined> | undefined): FindingStrength | null {
-  const word = groups?.month ?? '';
+const judgeDayMonth: Judge = ([whole]) => {
+  const [a = 0, b = 0] = whole.split('/').map(Number);
+  return isDayAndMonth(a, b) ? 'possible' : null;
+};
+
+const judgeMonthWord: Judge = ({ groups = {} }) => {
+  const { month: word = '', day, ordinal, year } = groups;
   const month = monthOfWord(word);
   if (month === null) return null;
-  const day = groups?.day === undefined ? null : Number.parseInt(groups.day, 10);
-  if (day !== null && !isDayOfMonth(day, month)) return null;
-  const year = groups?.year;
-  if (year?.length === 4) return day === null ? 'likely' : 'certain';
-  if (isAmbiguousMonth(word) && year === undefined) return null;
+  if (day !== undefined && !isDayOfMonth(Number(day), month)) return null;
+  if (year?.length === 4) return day === undefined ? 'likely' : 'certain';
+  if (isAmbiguousMonth(word) && year === undefined) return ordinal === undefined ? null : 'possible';
   return 'likely';
-}
-
-const isCapital = (word = ''): boolean => /^\p{Lu}/u.test(word);
-
-function matches(
-  text: string,
-  pattern: RegExp,
-  judge: (match: RegExpMatchArray) => FindingStrength | null,
-): Mark[] {
-  const marks: Mark[] = [];
-  for (const match of text.matchAll(pattern)) {
-    const strength = judge(match);
-    if (strength !== null && !followsVersionWord(text, match.index)) marks.push(markOf(match, 'date', strength));
-  }
-  return marks;
-}
-
-const followsVersionWord = (text: string, index: number): boolean =>
-  VERSION_BEFORE.test(text.slice(Math.max(0, index - 16), index));
+};

@@ -1,22 +1,22 @@
-/** What a finding may be. */
+/** What a finding may be; of two equally strong ones on the same spot the earlier kind is kept. */
 export const FINDING_KINDS = [
   'date-of-birth',
   'age-over-89',
   'date',
-  'name',
+  'email',
+  'url',
+  'ip-address',
   'nhs-number',
   'health-number',
   'national-id',
   'card-number',
-  'record-number',
   'device-serial',
-  'email',
-  'url',
-  'ip-address',
   'phone',
   'postcode',
   'address',
+  'name',
   'place',
+  'record-number',
 ] as const;
 export type FindingKind = (typeof FINDING_KINDS)[number];
 
@@ -45,12 +45,3 @@ export interface Mark {
 export type Detector = (text: string) => Mark[];
 
 export const strengthRank = (strength: FindingStrength): number => FINDING_STRENGTHS.indexOf(strength);
-
-/** The mark of a regular expression's match, or of its named group `value` where it has one. */
-export function markOf(match: RegExpMatchArray, kind: FindingKind, strength: FindingStrength): Mark {
-  const whole = match[0];
-  const value = match.groups?.value ?? whole;
-  // The value stands last in every pattern here that has one, except for trailing context.
-  const start = (match.index ?? 0) + whole.lastIndexOf(value);
-  return { kind, start, end: start + value.length, strength };
-}
