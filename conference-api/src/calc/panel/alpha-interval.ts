@@ -1,6 +1,6 @@
 import { requireInteger, requireNumber } from '../common/input-checks.js';
 import { seededRandom } from './seeded-random.js';
-import { alphaOf, readAlphaInput, type AlphaInput } from './krippendorff-alpha.js';
+import { alphaOf, readAlphaInput, type AlphaInput, type AlphaLevel, type PairableUnits } from './krippendorff-alpha.js';
 
 export interface AlphaIntervalInput extends AlphaInput {
   /** Resamples, 100–10000; default 1000. */
@@ -39,20 +39,14 @@ export function alphaInterval(input: AlphaIntervalInput): AlphaInterval {
   const resamples = requireInteger(input.resamples ?? 1000, 'resamples', 100, 10_000);
   const seed = requireInteger(input.seed ?? 1, 'seed', 0, 0xffff_ffff);
   const confidence = requireNumber(input.confidence ?? 0.95, 'confidence', 0.5, 0.999);
-  const { values, units } = pairable;
-  const { value, why } = alphaOf(level, values, units);
+  const { value, why } = alphaOf(level, pairable);
   const definition = `Percentile bootstrap over units, ${resamples} resamples, seed ${seed}.`;
   if (value === null) {
     return { value, why, low: null, high: null, resamplesUsed: 0, definition, cautions: [] };
   }
 
-  const random = seededRandom(seed);
-  const alphas: number[] = [];
-  for (let i = 0; i < resamples; i += 1) {
-    const drawn = units.map(() => units[Math.floor(random() * units.length)] as (typeof units)[number]);
-    const alpha = alphaOf(level, values, drawn).value;
-    if (alpha !== null) alphas.push(alpha);
-  }
+  const unitCount = pairable.units.length;
+  const alphas = resampledAlphas(level, pairable, resamples, seed);
   alphas.sort((a, b) => a - b);
   const tail = (1 - confidence) / 2;
   return {
@@ -62,8 +56,26 @@ export function alphaInterval(input: AlphaIntervalInput): AlphaInterval {
     high: quantile(alphas, 1 - tail),
     resamplesUsed: alphas.length,
     definition,
-    cautions: cautionsOf(units.length, resamples - alphas.length),
+    cautions: cautionsOf(unitCount, resamples - alphas.length),
   };
+}
+
+/** The defined alphas of so many draws of all units with replacement. */
+function resampledAlphas(level: AlphaLevel, pairable: PairableUnits, resamples: number, seed: number): number[] {
+  const random = seededRandom(seed);
+  const unitCount = pairable.units.length;
+  const drawn = new Int32Array(unitCount);
+  const alphas: number[] = [];
+  for (let i = 0; i < resamples; i += 1) {
+    drawn.fill(0);
+    for (let draw = 0; draw < unitCount; draw += 1) {
+      const unit = Math.floor(random() * unitCount);
+      drawn[unit] = (drawn[unit] as number) + 1;
+    }
+    const { value } = alphaOf(level, pairable, drawn);
+    if (value !== null) alphas.push(value);
+  }
+  return alphas;
 }
 
 function cautionsOf(units: number, undefinedResamples: number): string[] {

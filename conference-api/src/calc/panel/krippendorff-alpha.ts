@@ -46,7 +46,7 @@ export interface PairableUnits {
  */
 export function krippendorffAlpha(input: AlphaInput): Statistic {
   const { level, pairable } = readAlphaInput(input);
-  return alphaOf(level, pairable.values, pairable.units);
+  return alphaOf(level, pairable);
 }
 
 /** Checks the input and gathers the units that have at least two values. */
@@ -64,23 +64,23 @@ export function readAlphaInput(input: AlphaInput): { level: AlphaLevel; pairable
   return { level, pairable };
 }
 
-/** Alpha of units already gathered; the bootstrap calls this with resampled units. */
+/** Alpha of units already gathered, each as often as the bootstrap drew it (or once). */
 export function alphaOf(
   level: AlphaLevel,
-  values: readonly number[],
-  units: readonly UnitCounts[],
+  { values, units }: PairableUnits,
+  drawn: Int32Array = new Int32Array(units.length).fill(1),
 ): Statistic {
   if (units.length === 0) {
     return { value: null, why: 'No unit has two values: there is nothing to agree on.' };
   }
-  const totals = totalsOf(values.length, units);
+  const totals = totalsOf(values.length, units, drawn);
   const present = values.map((_, c) => c).filter((c) => (totals[c] as number) > 0);
   if (present.length === 1) {
     return { value: null, why: 'All values are identical, so no disagreement could be expected (De = 0).' };
   }
   const n = totals.reduce((sum, total) => sum + total, 0);
   const difference = squaredDifference(level, values, totals);
-  const observed = observedDisagreement(units, difference);
+  const observed = observedDisagreement(units, drawn, difference);
   let expected = 0;
   for (const c of present) {
     for (const k of present) {
@@ -116,12 +116,16 @@ function pairableUnits(data: (number | null)[][]): PairableUnits {
   return { values, units };
 }
 
-function totalsOf(valueCount: number, units: readonly UnitCounts[]): number[] {
+function totalsOf(valueCount: number, units: readonly UnitCounts[], drawn: Int32Array): number[] {
   const totals = new Array<number>(valueCount).fill(0);
   // Plain loops here and below: the bootstrap runs them millions of times.
-  for (const { indices, counts } of units) {
+  for (let u = 0; u < units.length; u += 1) {
+    const times = drawn[u] as number;
+    if (times === 0) continue;
+    const { indices, counts } = units[u] as UnitCounts;
     for (let i = 0; i < indices.length; i += 1) {
-      totals[indices[i] as number] = (totals[indices[i] as number] as number) + (counts[i] as number);
+      const value = indices[i] as number;
+      totals[value] = (totals[value] as number) + times * (counts[i] as number);
     }
   }
   return totals;
@@ -129,10 +133,14 @@ function totalsOf(valueCount: number, units: readonly UnitCounts[]): number[] {
 
 function observedDisagreement(
   units: readonly UnitCounts[],
+  drawn: Int32Array,
   difference: (c: number, k: number) => number,
 ): number {
   let sum = 0;
-  for (const { size, indices, counts } of units) {
+  for (let u = 0; u < units.length; u += 1) {
+    const times = drawn[u] as number;
+    if (times === 0) continue;
+    const { size, indices, counts } = units[u] as UnitCounts;
     let pairs = 0;
     for (let i = 1; i < indices.length; i += 1) {
       for (let j = 0; j < i; j += 1) {
@@ -140,7 +148,7 @@ function observedDisagreement(
         pairs += product * difference(indices[i] as number, indices[j] as number);
       }
     }
-    sum += (2 * pairs) / (size - 1);
+    sum += (2 * times * pairs) / (size - 1);
   }
   return sum;
 }

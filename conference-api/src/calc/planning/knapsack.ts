@@ -32,12 +32,12 @@ interface Prepared {
   dense: readonly number[];
 }
 
-const MOST_STATES = 4_000_000;
+const MOST_STATES = 1_500_000;
 
 /**
  * The exact optimum of the 0/1 knapsack: most worth; then least size; then the
  * earlier items (at the first index where two answers differ, the one that has
- * that item). Null when the search would need more than four million states.
+ * that item). Null when the search would need more than 1.5 million states.
  *
  * Works on the Pareto front of size and worth, from the last item to the first so
  * that ties fall to earlier items, and drops ways that cannot reach a worth known
