@@ -6,6 +6,9 @@ import { curve, DEG, seededRandom, smooth, toPlane } from './geometry.mjs';
 import { coarse, eachPixel } from './raster.mjs';
 import { ellipsoid } from './solids.mjs';
 
+// Taken out once: in a test's own context each look-up of a global is slow, and this runs per pixel.
+const { PI, abs, cos, exp, max, sin } = Math;
+
 /** Lower end of the teardrop, from the midline, mm. */
 export const TEARDROP = 58;
 /** Native hip centre: lateral from the midline and above the inter-teardrop line, mm. */
@@ -46,7 +49,7 @@ const LINES = {
   spine: [[57, 22, -40, 0], [51, 16, -44, 0.7], [47.5, 11, -46, 0.9], [51, 6, -44, 0.7], [57, 0, -38, 0]],
 };
 const TEARDROP_LINE = [
-  [62.4, 15, 0, 0], [61.9, 10, 0, 0.7], [60.9, 4, 0, 1.1], [57.6, 0, 0, 1.25], [54.2, 3.6, 0, 1.1], [54, 10, 0, 0.7], [55.4, 18, 0, 0.25], [57, 23, 0, 0],
+  [62.4, 15, 0, 0], [61.9, 10, 0, 0.7], [60.8, 3, 0, 1.1], [57.6, -0.5, 0, 1.25], [54.4, 2.6, 0, 1.1], [54, 10, 0, 0.7], [55.4, 18, 0, 0.25], [57, 23, 0, 0],
 ];
 
 const FULL = { from: -25 * DEG, to: 232 * DEG };
@@ -54,13 +57,16 @@ const FULL = { from: -25 * DEG, to: 232 * DEG };
 /** Where the lined socket of a side lies, as a cavity of the pelvis. */
 export function socket(camera, sideSign, centre, radius, options = {}) {
   const [x, y] = toPlane(camera, centre);
-  const turn = sideSign > 0 ? FULL : { from: Math.PI - FULL.to, to: Math.PI - FULL.from };
+  const turn = sideSign > 0 ? FULL : { from: PI - FULL.to, to: PI - FULL.from };
   return { x, y, radius, lining: 1.8, left: 0.36, weight: 0.8, ...turn, ...options };
 }
 
+// The far half seen from the side would shrink to a blade; real bone has depth there.
+const flatten = ([x, y, z, ...rest]) => [x, y, z + (0.6 * (42 - z)) * smooth(75, 15, y), ...rest];
+
 /** Half of the pelvis. `bone` may hold cavities, teardrop and ilioischial weights, density. */
 export function addHemipelvis(sheet, sideSign, bone) {
-  const side = (points) => place(points, sideSign);
+  const side = (points) => place(bone.flattened ? points.map(flatten) : points, sideSign);
   const smoothSide = (points) => curve(side(points), { steps: 5 });
   addBone(sheet, {
     outlines: [HEMIPELVIS, FORAMEN].map((o) => curve(side(o), { closed: true, steps: 4 })),
@@ -95,7 +101,7 @@ const LUMBAR = [
 const both = (half) => [...half, ...place(half.slice(0, -1), -1).reverse()].filter((p, i, a) => i === 0 || p[0] !== a[i - 1][0] || p[1] !== a[i - 1][1]);
 
 const ring = (x, y, z, a, b, weight) =>
-  Array.from({ length: 25 }, (_, k) => [x + a * Math.cos(k * 15 * DEG), y + b * Math.sin(k * 15 * DEG), z, weight]);
+  Array.from({ length: 25 }, (_, k) => [x + a * cos(k * 15 * DEG), y + b * sin(k * 15 * DEG), z, weight]);
 
 /** Sacrum, coccyx, last lumbar vertebra. */
 export function addSpine(sheet, density = 1) {
@@ -103,12 +109,12 @@ export function addSpine(sheet, density = 1) {
   const cavities = [1, -1].flatMap((s) =>
     FORAMINA.map(([x, y, a]) => {
       const [cx, cy] = toPlane(camera, [s * x, y, -60]);
-      return { x: cx, y: cy, radius: a * 0.8, lining: 0.9, left: 0.62, weight: 0.6, depth: 2.4, from: 0.1, to: Math.PI - 0.1 };
+      return { x: cx, y: cy, radius: a * 0.8, lining: 0.9, left: 0.62, weight: 0.6, depth: 2.4, from: 0.1, to: PI - 0.1 };
     }),
   );
   const t = thicknessField(camera, [[0, 118, -50, 34, 16], [44, 106, -58, 24, 14], [-44, 106, -58, 24, 14], [0, 80, -70, 20, 16], [0, 45, -76, 11, 14]]);
   addBone(sheet, { outlines: [curve(both(SACRUM), { closed: true, steps: 4 })], thickness: t, plate: 0.9, cavities, density: density * 0.9, pattern: trabeculae(0.5, 1) });
-  addBone(sheet, { outlines: [curve(both(LUMBAR), { closed: true, steps: 3 })], thickness: thicknessField(camera, [[0, 150, -25, 36, 14], [45, 156, -36, 7, 10], [-45, 156, -36, 7, 10]]), plate: 0.9, density: density * 0.85, pattern: trabeculae(Math.PI / 2, 1) });
+  addBone(sheet, { outlines: [curve(both(LUMBAR), { closed: true, steps: 3 })], thickness: thicknessField(camera, [[0, 150, -25, 36, 14], [45, 156, -36, 7, 10], [-45, 156, -36, 7, 10]]), plate: 0.9, density: density * 0.85, pattern: trabeculae(PI / 2, 1) });
   for (const s of [1, -1]) {
     addRidge(sheet, ring(s * 15, 158, -40, 4.6, 6, 0.8), 1, { bend: 5, cortex: 0.9, reach: 4 });
     addRidge(sheet, curve(place([[50, 116, -50, 0], [46, 104, -50, 0.8], [45.5, 92, -52, 0.9], [42, 80, -56, 0]], s), { steps: 4 }), s, { bend: 9, cortex: 0.9, reach: 4, mu: -0.02 });
@@ -126,22 +132,22 @@ export function addBody(sheet, body) {
   const reach = [-0.5 * width * camera.pitch, 0.5 * width * camera.pitch, -0.5 * height * camera.pitch, 0.5 * height * camera.pitch];
   const [tx, ty] = [camera.target[0], camera.target[1]];
   const oval = (x, half, depth, sharp) => {
-    const q = Math.abs(x) / half;
+    const q = abs(x) / half;
     return q >= 1 ? 0 : depth * (1 - q ** sharp) ** (1 / sharp);
   };
   const tissue = (x, y, inset) => {
-    const hips = Math.exp(-(((y + 28) / 95) ** 2));
+    const hips = exp(-(((y + 28) / 95) ** 2));
     const low = smooth(-30, -210, y);
     const trunk = oval(x, (152 + 34 * hips) * size - inset, 200 * size - 1.6 * inset, 2.6);
     const half = (92 - 10 * low) * size;
     const thigh = (s) => oval(x - s * (half + 2 + 5 * low), half - inset * 0.8, (186 - 30 * low) * size - 1.6 * inset, 2.4);
-    const legs = Math.max(thigh(1), thigh(-1));
-    return trunk + (legs - trunk) * smooth(-10, -125 + 0.35 * Math.abs(x), y);
+    const legs = max(thigh(1), thigh(-1));
+    return trunk + (legs - trunk) * smooth(-10, -125 + 0.35 * abs(x), y);
   };
   const grid = coarse(sheet, reach, 3, (ex, ey, out) => {
     out[0] = tissue(ex + tx, ey + ty, 0);
     out[1] = tissue(ex + tx, ey + ty, 24 * size);
-    out[2] = 1 + 0.014 * cloudiness(ex + 60, ey - 25) + 0.004 * mottle(ex, ey);
+    out[2] = 1 + 0.009 * cloudiness(ex + 60, ey - 25) + 0.004 * mottle(ex, ey);
   }, 4);
   eachPixel(sheet, grid, (k, ex, ey, at) => {
     sheet.tissue[k] += (MU.fat * at[0] + (MU.muscle - MU.fat) * at[1]) * at[2];
@@ -159,7 +165,7 @@ function addBowel(sheet, seed) {
     for (let i = 0; i < 4; i++) {
       const at = [x + (random() - 0.5) * 2.2 * a, y + (random() - 0.5) * 1.8 * b, 30 + 30 * random()];
       const k = 0.5 + 0.7 * random();
-      addSpot(sheet, ellipsoid(camera, at, [a * k, b * k, 10 * k + 5], [[0.8, 0.6, 0], [-0.6, 0.8, 0], [0, 0, 1]]), MU.gas * 0.6, 0.3, 20 * k + 10);
+      addSpot(sheet, ellipsoid(camera, at, [a * k, b * k, 10 * k + 5], [[0.8, 0.6, 0], [-0.6, 0.8, 0], [0, 0, 1]]), MU.gas * 0.5, 0.3, 20 * k + 10);
     }
   }
 }

@@ -5,6 +5,9 @@ import {
   addSolid, coarse, eachPixel, grain, outlineBox, outlineDistance, planeOutline,
 } from './raster.mjs';
 
+// Taken out once: in a test's own context each look-up of a global is slow, and this runs per pixel.
+const { PI, abs, atan2, cos, exp, max, min, sin, sqrt } = Math;
+
 // Above the soft tissue that the bone displaces, per mm, near 60 keV effective.
 export const MU = {
   muscle: 0.0205,
@@ -27,8 +30,8 @@ const clouds = grain(13, 9, 40, 1);
 
 /** Spongy bone's streaks along `angle` (radians), mean 0; what changes slowly is in `patches`. */
 export function trabeculae(angle = 0, strength = 1) {
-  const c = Math.cos(angle);
-  const s = Math.sin(angle);
+  const c = cos(angle);
+  const s = sin(angle);
   return (ex, ey) => {
     const u = ex * c + ey * s;
     const v = ey * c - ex * s;
@@ -41,7 +44,7 @@ const patches = (ex, ey) => 1 + 0.06 * broad(ex, ey) + 0.12 * clouds(ex, ey);
 export const cloudiness = (ex, ey) => clouds(ex, ey);
 export const mottle = (ex, ey) => broad(ex, ey);
 
-const dome = (q) => (q >= 1 ? 1 : q <= 0 ? 0 : Math.sqrt(q * (2 - q)));
+const dome = (q) => (q >= 1 ? 1 : q <= 0 ? 0 : sqrt(q * (2 - q)));
 
 /** Thickness field from weighted places [x, y, z, thickness mm, reach mm]. */
 export function thicknessField(camera, places) {
@@ -53,7 +56,7 @@ export function thicknessField(camera, places) {
     for (let i = 0; i < flat.length; i += 4) {
       const dx = ex - flat[i];
       const dy = ey - flat[i + 1];
-      const w = Math.exp(-(dx * dx + dy * dy) * flat[i + 3]) + 1e-5;
+      const w = exp(-(dx * dx + dy * dy) * flat[i + 3]) + 1e-5;
       sum += w * flat[i + 2];
       weight += w;
     }
@@ -66,6 +69,7 @@ export function thicknessField(camera, places) {
  * @property {number} x @property {number} y  in the isocentre plane, mm
  * @property {number} radius @property {number} lining mm @property {number} left share of the bone that stays in front and behind
  * @property {number=} from @property {number=} to  lining's arc, radians
+ * @property {number=} lobes how uneven the hole's edge is, 0 for round
  */
 
 /** What cavities leave of a thickness, to out[0], and their lining, to out[1]. */
@@ -76,22 +80,25 @@ function hollowOut(cavities, ex, ey, thickness, out) {
     const dx = ex - c.x;
     const dy = ey - c.y;
     const r2 = dx * dx + dy * dy;
-    const outer = (c.radius + c.lining) ** 2 - r2;
+    if (r2 > (1.3 * c.radius + c.lining) ** 2) continue;
+    const angle = atan2(dy, dx);
+    const radius = c.radius * (1 + (c.lobes ?? 0) * (sin(2 * angle + c.x) + 0.7 * sin(3 * angle + c.y) + 0.4 * sin(5 * angle)));
+    const outer = (radius + c.lining) ** 2 - r2;
     if (outer <= 0) continue;
-    const inner = c.radius * c.radius - r2;
-    const hole = inner > 0 ? 2 * Math.sqrt(inner) : 0;
-    out[0] = Math.max(thickness * c.left, out[0] - hole * (c.depth ?? 1));
-    let turn = Math.atan2(dy, dx) - (c.from ?? -Math.PI);
-    if (turn < 0) turn += 2 * Math.PI;
-    const span = (c.to ?? Math.PI) - (c.from ?? -Math.PI);
+    const inner = radius * radius - r2;
+    const hole = inner > 0 ? 2 * sqrt(inner) : 0;
+    out[0] = max(thickness * c.left, out[0] - hole * (c.depth ?? 1));
+    let turn = angle - (c.from ?? -PI);
+    if (turn < 0) turn += 2 * PI;
+    const span = (c.to ?? PI) - (c.from ?? -PI);
     const arc = span > 6.2 ? 1 : smooth(0, 0.35, turn) * smooth(0, 0.35, span - turn);
-    out[1] += arc * (2 * Math.sqrt(outer) - hole) * (c.weight ?? 1);
+    out[1] += arc * (2 * sqrt(outer) - hole) * (c.weight ?? 1);
   }
 }
 
 // A flat bone seen from the side shows its substance on a smaller field.
 const area = (outline) =>
-  Math.abs(outline.reduce((sum, p, i) => {
+  abs(outline.reduce((sum, p, i) => {
     const q = outline[(i + 1) % outline.length];
     return sum + p[0] * q[1] - q[0] * p[1];
   }, 0)) / 2;
@@ -126,10 +133,10 @@ export function addBone(sheet, bone) {
     // An edge without cortex is one bone passing behind another: it fades.
     const fade = cortex < 0.55 ? (1 - smooth(0.35, 0.55, cortex)) * (1 - smooth(0, 15, d)) : 0;
     const outer = t * dome(d / at[2]) * (1 - fade);
-    const core = Math.max(0, t - 2 * plate) * dome((d - cortex) / Math.max(0.5, at[2] - cortex));
-    const inner = Math.min(core, outer);
-    const shell = outer - inner + Math.min(left[1], 14) * smooth(0, 3, d);
-    const spongy = inner > 0 ? inner * Math.max(0.1, at[4] + pattern(ex, ey)) : 0;
+    const core = max(0, t - 2 * plate) * dome((d - cortex) / max(0.5, at[2] - cortex));
+    const inner = min(core, outer);
+    const shell = outer - inner + min(left[1], 14) * smooth(0, 3, d);
+    const spongy = inner > 0 ? inner * max(0.1, at[4] + pattern(ex, ey)) : 0;
     sheet.tissue[k] += cut * density * packed * (MU.cortex * shell + MU.spongy * spongy);
   });
 }
@@ -155,17 +162,17 @@ export function addRidge(sheet, points, side, surface = {}) {
       const r = rx * rx + ry * ry;
       if (r >= best) continue;
       best = r;
-      out[0] = Math.sqrt(r) * (dx * ry - dy * rx >= 0 ? side : -side);
+      out[0] = sqrt(r) * (dx * ry - dy * rx >= 0 ? side : -side);
       out[1] = w + t * (line[i + 1][2] - w);
     }
   });
   eachPixel(sheet, grid, (k, ex, ey, at) => {
     const d = at[0];
     if (d <= 0 || d > reach) return;
-    const outer = Math.sqrt(Math.max(0, 2 * bend * d - d * d));
+    const outer = sqrt(max(0, 2 * bend * d - d * d));
     const e = d - cortex;
     const r = bend - cortex;
-    const inner = e > 0 ? Math.sqrt(Math.max(0, 2 * r * e - e * e)) : 0;
+    const inner = e > 0 ? sqrt(max(0, 2 * r * e - e * e)) : 0;
     sheet.tissue[k] += mu * at[1] * 2 * (outer - inner) * smooth(0, soft, d) * smooth(reach, reach * 0.4, d);
   });
 }

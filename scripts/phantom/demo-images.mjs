@@ -1,7 +1,7 @@
 // The demo's images: invented hips, one entry a film, with the words that the demo shows beside it.
 
 const LATERAL = { projection: 'lateral', width: 1200, height: 1000, pixelSpacingMm: 0.25 };
-const OBLIQUE = { projection: 'oblique', width: 1000, height: 1200 };
+const OBLIQUE = { projection: 'oblique', width: 900, height: 1200 };
 const LONG_FILM = { centreMm: [0, -34] };
 
 const domeScrew = (clockDeg, lengthMm, polarDeg = 27, tiltDeg = 0) => ({ polarDeg, clockDeg, lengthMm, tiltDeg });
@@ -49,7 +49,7 @@ const CASES = {
   },
   'long-screws': {
     seed: 106, side: 'right', rollDeg: -0.5,
-    shell: { outerMm: 54, inclinationDeg: 42, versionDeg: 13, heightMm: 21, lateralMm: 28, screws: [domeScrew(8, 40, 22), domeScrew(-150, 45, 26), domeScrew(-70, 40, 30)] },
+    shell: { outerMm: 54, inclinationDeg: 42, versionDeg: 13, heightMm: 21, lateralMm: 28, screws: [domeScrew(8, 35, 22), domeScrew(-86, 50, 24), domeScrew(-150, 45, 34)] },
     head: { diameterMm: 32 },
   },
   'cemented-cup': {
@@ -71,7 +71,7 @@ const CASES = {
     head: { diameterMm: 28 },
     bone: { density: 0.84 },
     legLengthDifferenceMm: -11,
-    femurFracture: { path: SPIRAL, shift: [3, 6], turnDeg: -7 },
+    femurFracture: { path: SPIRAL, shift: [5, -5], turnDeg: -8 },
   },
   'stem-fracture': {
     seed: 110, side: 'right', rollDeg: 0.5, ...LONG_FILM, body: { size: 1.06 },
@@ -139,7 +139,7 @@ export function demoImages() {
     film('high-centre-medial', 'oblique', '11 years', 'Oblique of the same hip', OBLIQUE),
     film('migration-early', 'ap', '1 year', 'First follow-up film'),
     film('migration-late', 'ap', '6 years', 'Shell has moved up and outwards, lucent line all round'),
-    film('long-screws', 'ap', '5 years', 'Two screws pass the inner table'),
+    film('long-screws', 'ap', '5 years', 'Two screws pass the pelvic brim'),
     film('long-screws', 'oblique', '5 years', 'Screw tips in the oblique view', OBLIQUE),
     film('cemented-cup', 'ap', '17 years', 'Cemented cup with wire marker, lucent line between cement and bone'),
     film('cemented-cup', 'lateral', '17 years', 'Same hip, shoot-through lateral', LATERAL),

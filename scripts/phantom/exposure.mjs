@@ -3,6 +3,9 @@
 
 import { clamp, mix, seededRandom } from './geometry.mjs';
 
+// Taken out once: in a test's own context each look-up of a global is slow, and this runs per pixel.
+const { PI, ceil, cos, exp, floor, log, max, min, round, sqrt, tanh } = Math;
+
 /** Running mean along rows, written transposed. */
 function boxTransposed(data, width, height, radius) {
   const out = new Float32Array(data.length);
@@ -10,10 +13,10 @@ function boxTransposed(data, width, height, radius) {
   for (let y = 0; y < height; y++) {
     const row = y * width;
     let sum = data[row] * (radius + 1);
-    for (let k = 1; k <= radius; k++) sum += data[row + Math.min(k, width - 1)];
+    for (let k = 1; k <= radius; k++) sum += data[row + min(k, width - 1)];
     for (let x = 0; x < width; x++) {
       out[x * height + y] = sum / n;
-      sum += data[row + Math.min(x + radius + 1, width - 1)] - data[row + Math.max(x - radius, 0)];
+      sum += data[row + min(x + radius + 1, width - 1)] - data[row + max(x - radius, 0)];
     }
   }
   return out;
@@ -31,15 +34,15 @@ export function blur(data, width, height, radius, times = 2) {
 const CELL = 8;
 
 function shrink(data, width, height) {
-  const w = Math.ceil(width / CELL);
-  const h = Math.ceil(height / CELL);
+  const w = ceil(width / CELL);
+  const h = ceil(height / CELL);
   const out = new Float32Array(w * h);
   for (let j = 0; j < h; j++) {
     for (let i = 0; i < w; i++) {
       let sum = 0;
       let count = 0;
-      for (let y = j * CELL; y < Math.min(height, (j + 1) * CELL); y += 2) {
-        for (let x = i * CELL; x < Math.min(width, (i + 1) * CELL); x += 2) {
+      for (let y = j * CELL; y < min(height, (j + 1) * CELL); y += 2) {
+        for (let x = i * CELL; x < min(width, (i + 1) * CELL); x += 2) {
           sum += data[y * width + x];
           count++;
         }
@@ -56,11 +59,11 @@ function rowsOf({ w, h, data }, width) {
   const row = new Float32Array(width);
   return (y) => {
     const v = clamp((y - 3) / CELL, 0, h - 1.001);
-    const j = Math.floor(v);
+    const j = floor(v);
     for (let i = 0; i < w; i++) across[i] = mix(data[j * w + i], data[(j + 1) * w + i], v - j);
     across[w] = across[w - 1];
     for (let x = 0; x < width; x++) {
-      const u = Math.max(0, (x - 3) / CELL);
+      const u = max(0, (x - 3) / CELL);
       const i = u | 0;
       row[x] = across[i] + (across[i + 1] - across[i]) * (u - i);
     }
@@ -71,8 +74,8 @@ function rowsOf({ w, h, data }, width) {
 function bellTable(seed) {
   const random = seededRandom(seed);
   return Float32Array.from({ length: 65536 }, () => {
-    const r = Math.sqrt(-2 * Math.log(1 - random()));
-    return r * Math.cos(2 * Math.PI * random());
+    const r = sqrt(-2 * log(1 - random()));
+    return r * cos(2 * PI * random());
   });
 }
 
@@ -82,11 +85,11 @@ function detect(sheet, spec) {
   const { scatter = 0.16, quanta = 5200 } = spec.exposure;
   const n = width * height;
   const primary = new Float32Array(n);
-  for (let i = 0; i < n; i++) primary[i] = Math.exp(-tissue[i] - metal[i]);
+  for (let i = 0; i < n; i++) primary[i] = exp(-tissue[i] - metal[i]);
   const sharp = blur(primary, width, height, 1, 1);
   for (let i = 0; i < n; i++) sharp[i] = 0.45 * primary[i] + 0.55 * sharp[i];
   const small = shrink(primary, width, height);
-  for (let i = 0; i < small.data.length; i++) small.data[i] = Math.min(small.data[i], 0.09);
+  for (let i = 0; i < small.data.length; i++) small.data[i] = min(small.data[i], 0.09);
   const haze = rowsOf({ ...small, data: blur(small.data, small.w, small.h, 14) }, width);
   const bell = bellTable(spec.seed * 31 + 7);
   const pick = seededRandom(spec.seed * 131 + 5);
@@ -96,8 +99,8 @@ function detect(sheet, spec) {
     for (let x = 0; x < width; x++) {
       const i = y * width + x;
       const signal = sharp[i] + scatter * veil[x] + 2e-4;
-      const noise = bell[(pick() * 65536) | 0] / Math.sqrt(quanta * signal * 60);
-      out[i] = -Math.log(signal * Math.max(0.2, 1 + noise));
+      const noise = bell[(pick() * 65536) | 0] / sqrt(quanta * signal * 60);
+      out[i] = -log(signal * max(0.2, 1 + noise));
     }
   }
   return out;
@@ -105,7 +108,7 @@ function detect(sheet, spec) {
 
 function levels(values) {
   const bins = new Uint32Array(4096);
-  for (let i = 0; i < values.length; i += 7) bins[clamp(Math.floor(values[i] * 256), 0, 4095)]++;
+  for (let i = 0; i < values.length; i += 7) bins[clamp(floor(values[i] * 256), 0, 4095)]++;
   const total = bins.reduce((a, b) => a + b, 0);
   return (share) => {
     let sum = 0;
@@ -123,7 +126,7 @@ function collimate(pixels, spec) {
   const edge = collimationMm / pixelSpacingMm;
   for (let y = 0; y < height; y++) {
     for (let x = 0; x < width; x++) {
-      const d = Math.min(x, y, width - 1 - x, height - 1 - y) - edge;
+      const d = min(x, y, width - 1 - x, height - 1 - y) - edge;
       if (d < 3) pixels[y * width + x] *= d < 0 ? 0 : (d + 1) / 4;
     }
   }
@@ -135,8 +138,8 @@ const TONES = 16384;
 function toneCurve() {
   return Uint16Array.from({ length: TONES }, (_, i) => {
     const v = (2 * i) / (TONES - 1);
-    const bent = v < 0.66 ? v : 0.66 + 0.34 * Math.tanh((v - 0.66) / 0.34);
-    return Math.round(4095 * clamp(bent, 0, 1) ** 1.25);
+    const bent = v < 0.66 ? v : 0.66 + 0.34 * tanh((v - 0.66) / 0.34);
+    return round(4095 * clamp(bent, 0, 1) ** 1.25);
   });
 }
 
@@ -164,7 +167,7 @@ export function expose(sheet, spec) {
   const tone = toneCurve();
   const pixels = new Uint16Array(width * height);
   const k = (TONES - 1) / 2 / (high - low);
-  for (let i = 0; i < pixels.length; i++) pixels[i] = tone[clamp(Math.round((film[i] - low) * k), 0, TONES - 1)];
+  for (let i = 0; i < pixels.length; i++) pixels[i] = tone[clamp(round((film[i] - low) * k), 0, TONES - 1)];
   collimate(pixels, spec);
   return pixels;
 }

@@ -2,6 +2,9 @@
 // middle between the teardrops' lower ends. Pixel coordinates count from the centre of the
 // upper left pixel, x to the right, y downwards.
 
+// Taken out once: in a test's own context each look-up of a global is slow, and this runs per pixel.
+const { PI, abs, asin, atan2, cos, hypot, imul, max, min, sign, sin, sqrt } = Math;
+
 /** @typedef {[number, number, number]} Vec3 */
 /** @typedef {{x: number, y: number}} Point */
 /**
@@ -14,7 +17,7 @@
  * @property {number} width @property {number} height
  */
 
-export const DEG = Math.PI / 180;
+export const DEG = PI / 180;
 
 export const add = (a, b) => [a[0] + b[0], a[1] + b[1], a[2] + b[2]];
 export const sub = (a, b) => [a[0] - b[0], a[1] - b[1], a[2] - b[2]];
@@ -25,7 +28,7 @@ export const cross = (a, b) => [
   a[2] * b[0] - a[0] * b[2],
   a[0] * b[1] - a[1] * b[0],
 ];
-export const length = (a) => Math.hypot(a[0], a[1], a[2]);
+export const length = (a) => hypot(a[0], a[1], a[2]);
 export const unit = (a) => scale(a, 1 / length(a));
 export const clamp = (v, lo, hi) => (v < lo ? lo : v > hi ? hi : v);
 export const mix = (a, b, t) => a + (b - a) * t;
@@ -36,7 +39,7 @@ export const smooth = (lo, hi, v) => {
 
 /** Two unit vectors that stand square on `n` and on each other. */
 export function perpendiculars(n) {
-  const helper = Math.abs(n[2]) < 0.9 ? [0, 0, 1] : [1, 0, 0];
+  const helper = abs(n[2]) < 0.9 ? [0, 0, 1] : [1, 0, 0];
   const first = unit(cross(helper, n));
   return [first, cross(n, first)];
 }
@@ -47,8 +50,8 @@ export function seededRandom(seed) {
   return () => {
     state = (state + 0x6d2b79f5) >>> 0;
     let t = state;
-    t = Math.imul(t ^ (t >>> 15), t | 1);
-    t ^= t + Math.imul(t ^ (t >>> 7), t | 61);
+    t = imul(t ^ (t >>> 15), t | 1);
+    t ^= t + imul(t ^ (t >>> 7), t | 61);
     return ((t ^ (t >>> 14)) >>> 0) / 4294967296;
   };
 }
@@ -83,8 +86,8 @@ export function project(camera, point) {
 export function makeCamera({ toSource, up, target, rollDeg = 0, ...film }) {
   const sourceMm = film.sourceDetectorMm / film.magnification;
   const right = cross(up, toSource);
-  const c = Math.cos(rollDeg * DEG);
-  const s = Math.sin(rollDeg * DEG);
+  const c = cos(rollDeg * DEG);
+  const s = sin(rollDeg * DEG);
   return {
     right: add(scale(right, c), scale(up, -s)),
     up: add(scale(up, c), scale(right, s)),
@@ -108,9 +111,9 @@ export function openingAxis(inclinationDeg, versionDeg, sideSign) {
   const i = inclinationDeg * DEG;
   const v = versionDeg * DEG;
   return [
-    sideSign * Math.sin(i) * Math.cos(v),
-    -Math.cos(i) * Math.cos(v),
-    Math.sin(v),
+    sideSign * sin(i) * cos(v),
+    -cos(i) * cos(v),
+    sin(v),
   ];
 }
 
@@ -118,8 +121,8 @@ export function openingAxis(inclinationDeg, versionDeg, sideSign) {
 export function circlePoints(centre, axis, radius, count) {
   const [a, b] = perpendiculars(axis);
   return Array.from({ length: count }, (_, k) => {
-    const t = (k / count) * 2 * Math.PI;
-    return add(centre, add(scale(a, radius * Math.cos(t)), scale(b, radius * Math.sin(t))));
+    const t = (k / count) * 2 * PI;
+    return add(centre, add(scale(a, radius * cos(t)), scale(b, radius * sin(t))));
   });
 }
 
@@ -149,12 +152,12 @@ export function projectedCircle(camera, centre, axis, radius) {
   const sxx = dual(0, 0) * k + x * x;
   const syy = dual(1, 1) * k + y * y;
   const sxy = -(dual(0, 1) * k + x * y);
-  const half = Math.hypot((sxx - syy) / 2, sxy);
+  const half = hypot((sxx - syy) / 2, sxy);
   return {
     centre: { x: middle.x + x, y: middle.y + y },
-    major: 2 * Math.sqrt((sxx + syy) / 2 + half),
-    minor: 2 * Math.sqrt(Math.max(0, (sxx + syy) / 2 - half)),
-    angleDeg: (0.5 * Math.atan2(2 * sxy, sxx - syy)) / DEG,
+    major: 2 * sqrt((sxx + syy) / 2 + half),
+    minor: 2 * sqrt(max(0, (sxx + syy) / 2 - half)),
+    angleDeg: (0.5 * atan2(2 * sxy, sxx - syy)) / DEG,
   };
 }
 
@@ -162,12 +165,12 @@ export function projectedCircle(camera, centre, axis, radius) {
 export function filmAngles(camera, centre, axis, radius, sideSign, rollDeg) {
   const e = projectedCircle(camera, centre, axis, radius);
   const source = add(camera.target, scale(camera.toSource, camera.sourceMm));
-  const facing = Math.sign(dot(axis, sub(source, centre))) || 1;
+  const facing = sign(dot(axis, sub(source, centre))) || 1;
   let inclination = sideSign * (e.angleDeg - rollDeg);
   if (inclination < 0) inclination += 180;
   return {
     inclinationDeg: inclination,
-    versionDeg: (facing * Math.asin(Math.min(1, e.minor / e.major))) / DEG,
+    versionDeg: (facing * asin(min(1, e.minor / e.major))) / DEG,
     ellipse: e,
   };
 }

@@ -142,7 +142,7 @@ function cutRows(rows, y) {
  * Stem, neck and head. `frame` is the stem's frame with its origin in the head.
  * @returns {{tip: import('./geometry.mjs').Vec3}} stem's tip
  */
-export function addStem(sheet, { stem, head }, frame, brokenFrame) {
+export function addStem(sheet, { stem }, frame, brokenFrame) {
   const { camera } = sheet;
   const rows = STEMS[stem.kind];
   const mu = METAL[stem.material ?? (stem.kind === 'cemented' ? 'steel' : 'titanium')];
@@ -169,7 +169,7 @@ export function addCables(sheet, heights, frame) {
   for (const y of heights) {
     const half = y > -75 ? 16.5 : 14.6;
     const middle = frame.toPatient([42, y, 0]);
-    const tilted = unit(add(frame.down, scale(frame.lateral, 0.06)));
+    const tilted = unit(add(frame.down, add(scale(frame.lateral, 0.07), [0, 0, 0.16])));
     addWire(sheet, circlePoints(middle, tilted, half, 48), 0.85, MU.cobalt * 0.7);
     const crimp = frame.toPatient([42 + half + 0.8, y, 2]);
     addMetal(sheet, frustum(sheet.camera, add(crimp, scale(frame.down, -4)), add(crimp, scale(frame.down, 4)), 2.2, 2.2), MU.cobalt * 0.7);

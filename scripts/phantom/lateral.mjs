@@ -2,6 +2,7 @@
 // leg lifted out of the way. Front of the body is up.
 
 import { addBone, addRidge, addSpot, cloudiness, MU, mottle, thicknessField, trabeculae } from './bones.mjs';
+import { breakLine } from './femur.mjs';
 import { add, curve, DEG, scale, smooth, toPlane } from './geometry.mjs';
 import { addSolid, coarse, eachPixel } from './raster.mjs';
 import { ellipsoid, loft } from './solids.mjs';
@@ -40,7 +41,7 @@ function addThigh(sheet, scene, size) {
     const flesh = q < 1 ? thick * (1 - q ** 2.4) ** 0.5 : 0;
     const skin = q < 0.86 ? thick * (1 - (q / 0.86) ** 2.4) ** 0.5 : 0;
     const mattress = v < back - 2 && v > back - 26 ? 0.05 : 0;
-    out[0] = (MU.fat * flesh + (MU.muscle - MU.fat) * skin) * (1 + 0.02 * cloudiness(ex - 14, ey + 33)) + mattress;
+    out[0] = (MU.fat * flesh + (MU.muscle - MU.fat) * skin) * (1 + 0.007 * cloudiness(ex - 14, ey + 33)) + mattress;
   }, 3);
   eachPixel(sheet, grid, (k, ex, ey, at) => {
     sheet.tissue[k] += at[0];
@@ -73,31 +74,34 @@ function addSocketBone(sheet, spec, scene, beamDeg) {
   addRidge(sheet, curve(line, { steps: 5 }), -scene.sideSign, { bend: 12, cortex: 0.9, soft: 1 });
 }
 
+const SIDE_BREAK = [[42, -156, -22], [42, -142, -13], [42, -124, -3], [42, -104, 8], [42, -88, 16], [42, -78, 24]];
+
 /** Femur as nested lofts: bone, then the canal taken out again. */
-function addFemurLofts(sheet, spec, frame, broken) {
+function addFemurLofts(sheet, spec, frame, slipped) {
   const { camera } = sheet;
   const at = (f, rows, inset) => rows.map(([x, y, z, a, b]) => ({ p: f.toPatient([x, y, z]), a: a - inset(y), b: b - inset(y) }));
   const grainOf = trabeculae(0.15 * frame.sideSign, 1);
   const rough = (ex, ey) => Math.max(0.2, 1 + grainOf(ex, ey) + 0.08 * mottle(ex, ey));
   const rows = [[43, -22, -3, 17, 15], [42, -40, -1, 20, 16.5], [41, -58, 0, 17, 15.5], [42, -78, 1.5, 14.6, 14.8], [42, -110, 3, 14, 14.2], [42, -160, 4.5, 13.9, 14], [42, -220, 4, 13.8, 14], [42, -280, 2, 13.7, 14]];
   const cortex = (y) => 1 + 5.2 * smooth(-35, -115, y);
-  const pieces = [[frame, rows]];
-  if (broken) {
-    const k = rows.findIndex((r) => r[1] < broken.at);
-    const cut = [42, broken.at, 2.5, 14.3, 14.4];
-    pieces.splice(0, 1, [frame, [...rows.slice(0, k), cut]], [broken.frame, [cut, ...rows.slice(k)]]);
-  }
   const density = spec.bone.density * 0.9;
-  for (const [f, part] of pieces) {
-    addSolid(sheet, loft(camera, at(f, part, () => 0), f.lateral), MU.cortex * density);
-    addSolid(sheet, loft(camera, at(f, part, cortex), f.lateral), -MU.cortex * density);
-    addSolid(sheet, loft(camera, at(f, part, cortex), f.lateral), MU.spongy * density * 0.7, 'tissue', rough);
+  const draw = (f, mask) => {
+    const part = (inset) => loft(camera, at(f, rows, inset), f.lateral);
+    addSolid(sheet, part(() => 0), MU.cortex * density, 'tissue', mask);
+    addSolid(sheet, part(cortex), -MU.cortex * density, 'tissue', mask);
+    addSolid(sheet, part(cortex), MU.spongy * density * 0.7, 'tissue', (ex, ey) => rough(ex, ey) * mask(ex, ey));
+  };
+  if (!slipped) draw(frame, () => 1);
+  else {
+    // The same spiral from the side: the part above the line is the lower fragment.
+    const upper = breakLine(camera, frame, SIDE_BREAK, spec.seed);
+    const lower = breakLine(camera, slipped, SIDE_BREAK, spec.seed);
+    draw(frame, (ex, ey) => smooth(0.15, -0.15, upper(ex, ey)));
+    draw(slipped, (ex, ey) => smooth(-0.15, 0.15, lower(ex, ey)));
   }
-  const lump = (p, radii, mu) => addSpot(sheet, ellipsoid(camera, frame.toPatient(p), radii), mu, 0.2);
-  for (const [p, radii] of [[[54, -18, -10], [12, 25, 14]], [[25, -59, -9], [9, 12, 8]]]) {
-    lump(p, radii, MU.cortex * density * 0.8);
-    lump(p, radii.map((r) => r - 1), (MU.spongy * 0.7 - MU.cortex) * density * 0.8);
-  }
+  const lump = (p, radii) => addSpot(sheet, ellipsoid(camera, frame.toPatient(p), radii), MU.spongy * 2.2 * density, 0.2, 2 * radii[2]);
+  lump([54, -20, -9], [14, 27, 15]);
+  lump([26, -58, -8], [10, 13, 9]);
 }
 
 /** Everything of the lateral view but the implants. */
@@ -106,7 +110,5 @@ export function addLateral(sheet, spec, scene) {
   const { femur } = scene;
   addThigh(sheet, scene, spec.body.size);
   addSocketBone(sheet, spec, scene, beamDeg);
-  const fracture = spec.femurFracture;
-  const broken = fracture && { at: fracture.path[Math.floor(fracture.path.length / 2)][1], frame: femur.slipped };
-  addFemurLofts(sheet, spec, femur.bone, broken);
+  addFemurLofts(sheet, spec, femur.bone, femur.slipped);
 }

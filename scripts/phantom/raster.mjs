@@ -3,6 +3,9 @@
 
 import { clamp, seededRandom, toPlane } from './geometry.mjs';
 
+// Taken out once: in a test's own context each look-up of a global is slow, and this runs per pixel.
+const { ceil, floor, max, min, round, sqrt } = Math;
+
 const STEP = 2;
 const TILE = 512;
 
@@ -23,10 +26,10 @@ export function makeSheet(camera) {
 const columns = (sheet, box) => {
   const { camera, width, height } = sheet;
   return [
-    clamp(Math.floor(camera.cx + box[0] / camera.pitch), 0, width),
-    clamp(Math.ceil(camera.cx + box[1] / camera.pitch) + 1, 0, width),
-    clamp(Math.floor(camera.cy - box[3] / camera.pitch), 0, height),
-    clamp(Math.ceil(camera.cy - box[2] / camera.pitch) + 1, 0, height),
+    clamp(floor(camera.cx + box[0] / camera.pitch), 0, width),
+    clamp(ceil(camera.cx + box[1] / camera.pitch) + 1, 0, width),
+    clamp(floor(camera.cy - box[3] / camera.pitch), 0, height),
+    clamp(ceil(camera.cy - box[2] / camera.pitch) + 1, 0, height),
   ];
 };
 
@@ -54,8 +57,8 @@ export function addSolid(sheet, solid, mu, layer = 'tissue', shade) {
 export function coarse(sheet, box, channels, fill, step = STEP) {
   const { camera } = sheet;
   const [x0, x1, y0, y1] = columns(sheet, box);
-  const w = Math.ceil((x1 - x0) / step) + 2;
-  const h = Math.ceil((y1 - y0) / step) + 2;
+  const w = ceil((x1 - x0) / step) + 2;
+  const h = ceil((y1 - y0) / step) + 2;
   const data = Array.from({ length: channels }, () => new Float32Array(w * h));
   const out = new Float64Array(channels);
   for (let j = 0; j < h; j++) {
@@ -73,11 +76,11 @@ export function eachPixel(sheet, grid, visit) {
   const values = new Float64Array(grid.data.length);
   for (let y = grid.y0; y < grid.y1; y++) {
     const v = (y - grid.y0) / grid.step;
-    const j = Math.floor(v);
+    const j = floor(v);
     const fv = v - j;
     for (let x = grid.x0; x < grid.x1; x++) {
       const u = (x - grid.x0) / grid.step;
-      const i = Math.floor(u);
+      const i = floor(u);
       const fu = u - i;
       const k = j * grid.w + i;
       for (let c = 0; c < values.length; c++) {
@@ -100,8 +103,8 @@ export function outlineBox(outline, margin = 0) {
   const xs = outline.map((p) => p[0]);
   const ys = outline.map((p) => p[1]);
   return [
-    Math.min(...xs) - margin, Math.max(...xs) + margin,
-    Math.min(...ys) - margin, Math.max(...ys) + margin,
+    min(...xs) - margin, max(...xs) + margin,
+    min(...ys) - margin, max(...ys) + margin,
   ];
 }
 
@@ -125,16 +128,16 @@ function cellIndex(f) {
   const all = Array.from({ length: f.length / 9 }, (_, i) => i * 9);
   const where = [0];
   return (ex, ey) => {
-    const i = Math.floor(ex / CELL);
-    const j = Math.floor(ey / CELL);
+    const i = floor(ex / CELL);
+    const j = floor(ey / CELL);
     const key = i * 4096 + j;
     let found = cells.get(key);
     if (!found) {
-      const far = all.map((k) => Math.sqrt(toSegment(f, k, (i + 0.5) * CELL, (j + 0.5) * CELL, where)));
-      const limit = Math.min(...far) + CELL * 1.42;
+      const far = all.map((k) => sqrt(toSegment(f, k, (i + 0.5) * CELL, (j + 0.5) * CELL, where)));
+      const limit = min(...far) + CELL * 1.42;
       if (!bands.has(j)) {
-        const low = (k) => Math.min(f[k + 1], f[k + 1] + f[k + 3]);
-        const high = (k) => Math.max(f[k + 1], f[k + 1] + f[k + 3]);
+        const low = (k) => min(f[k + 1], f[k + 1] + f[k + 3]);
+        const high = (k) => max(f[k + 1], f[k + 1] + f[k + 3]);
         bands.set(j, Int32Array.from(all.filter((k) => low(k) <= (j + 1) * CELL && high(k) >= j * CELL)));
       }
       found = { near: Int32Array.from(all.filter((_, n) => far[n] <= limit)), band: bands.get(j) };
@@ -174,7 +177,7 @@ export function outlineDistance(outlines) {
       const dy = f[k + 3];
       if (oy < 0 !== oy - dy < 0 && ex - f[k] < (oy / dy) * f[k + 2]) inside = !inside;
     }
-    out[0] = inside ? Math.sqrt(best) : -Math.sqrt(best);
+    out[0] = inside ? sqrt(best) : -sqrt(best);
   };
 }
 
@@ -205,19 +208,19 @@ const blurBoth = (data, radius, times) => {
 export function grain(seed, fineMm, coarseMm, cellMm = 0.25) {
   const random = seededRandom(seed);
   const white = Float32Array.from({ length: TILE * TILE }, () => random() - 0.5);
-  const fine = blurBoth(white, Math.max(1, Math.round(fineMm / cellMm / 2)), 2);
-  const wide = blurBoth(white, Math.max(2, Math.round(coarseMm / cellMm / 2)), 2);
+  const fine = blurBoth(white, max(1, round(fineMm / cellMm / 2)), 2);
+  const wide = blurBoth(white, max(2, round(coarseMm / cellMm / 2)), 2);
   let sum = 0;
   for (let i = 0; i < fine.length; i++) {
     fine[i] -= wide[i];
     sum += fine[i] * fine[i];
   }
-  const k = 1 / Math.sqrt(sum / fine.length);
+  const k = 1 / sqrt(sum / fine.length);
   return (u, v) => {
     const fx = u / cellMm;
     const fy = v / cellMm;
-    const ix = Math.floor(fx);
-    const iy = Math.floor(fy);
+    const ix = floor(fx);
+    const iy = floor(fy);
     const x = fx - ix;
     const y = fy - iy;
     const a = (iy & (TILE - 1)) * TILE;

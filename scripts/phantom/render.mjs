@@ -4,6 +4,7 @@ import { addBody, addHemipelvis, addSpine, HIP, socket } from './anatomy.mjs';
 import { expose } from './exposure.mjs';
 import { addFemur } from './femur.mjs';
 import { addCables, addCup, addHead, addStem } from './implants.mjs';
+import { addKnee, kneeCamera, kneeTruth } from './knee.mjs';
 import { addLateral } from './lateral.mjs';
 import { burnIn, leadMarker } from './letters.mjs';
 import { makeSheet } from './raster.mjs';
@@ -25,10 +26,13 @@ function cavitiesOf(spec, scene) {
   return [main, ...bone.cavities.map((c) => boneCavity(camera, sideSign, c))];
 }
 
+// Lytic cavities: uneven, with little reaction at the edge.
+const LYSIS = { lining: 0.6, left: 0.38, depth: 1.2, weight: 0.22, lobes: 0.09 };
+
 /** Cavity given by place lateral of the midline and above the teardrop line. */
 function boneCavity(camera, sideSign, c) {
   const [x, y] = toPlane(camera, [sideSign * c.atMm[0], c.atMm[1], 0]);
-  return { x, y, radius: c.radiusMm, lining: c.liningMm ?? 0.7, left: c.left ?? 0.35, depth: c.depth ?? 1.2, weight: 0.6 };
+  return { ...LYSIS, x, y, radius: c.radiusMm, left: c.left ?? LYSIS.left };
 }
 
 function drawPelvis(sheet, spec, scene) {
@@ -37,14 +41,25 @@ function drawPelvis(sheet, spec, scene) {
   addBody(sheet, { ...spec.body, seed: spec.seed });
   addSpine(sheet, density);
   const native = socket(camera, -sideSign, [-sideSign * HIP.x, HIP.y, 0], HIP.head + 3.2);
-  addHemipelvis(sheet, -sideSign, { density, cavities: [native] });
+  addHemipelvis(sheet, -sideSign, { density, cavities: [native], flattened: spec.projection === 'oblique' });
   addHemipelvis(sheet, sideSign, { ...spec.bone, cavities: cavitiesOf(spec, scene) });
   addFemur(sheet, { frame: femur.other, density, seed: spec.seed + 1 });
   const lysis = (spec.femurCavities ?? []).map((c) => {
     const [x, y] = toPlane(camera, femur.bone.toPatient([...c.atMm, 0]));
-    return { x, y, radius: c.radiusMm, lining: 0.6, left: 0.4, depth: 1.1, weight: 0.6 };
+    return { ...LYSIS, x, y, radius: c.radiusMm };
   });
   addFemur(sheet, { frame: femur.bone, operated: true, density, seed: spec.seed, fracture: spec.femurFracture, slipped: femur.slipped, cavities: lysis });
+}
+
+function drawKnee(spec) {
+  const camera = kneeCamera(spec);
+  const sideSign = spec.side === 'left' ? 1 : -1;
+  const sheet = makeSheet(camera);
+  addKnee(sheet, spec, sideSign);
+  leadMarker(sheet, spec);
+  const pixels = expose(sheet, spec);
+  const truth = { ...kneeTruth(spec, camera, sideSign), burnedIn: burnIn(pixels, spec) };
+  return { width: spec.width, height: spec.height, pixels, truth, spec };
 }
 
 /**
@@ -55,6 +70,7 @@ function drawPelvis(sheet, spec, scene) {
  */
 export function drawRadiograph(input) {
   const spec = completeSpec(input);
+  if (spec.projection === 'ap-knee') return drawKnee(spec);
   const scene = layOut(spec);
   const sheet = makeSheet(scene.camera);
   if (spec.projection === 'lateral') addLateral(sheet, spec, scene);

@@ -94,7 +94,7 @@ export function layOut(spec) {
   return {
     sideSign, front, camera, cup, space, opening, headCentre, femur, broken,
     screws: shell.kind === 'cemented' ? [] : screwPlaces(shell, cup, opening),
-    teardrops: { left: [TEARDROP, -0.4, 0], right: [-TEARDROP, -0.4, 0] },
+    teardrops: { left: [TEARDROP, 0, 0], right: [-TEARDROP, 0, 0] },
   };
 }
 

@@ -5,6 +5,9 @@ import {
   add, clamp, cross, dot, length, mix, scale, sub, toCamera, turnToCamera, unit,
 } from './geometry.mjs';
 
+// Taken out once: in a test's own context each look-up of a global is slow, and this runs per pixel.
+const { abs, floor, hypot, max, min, sqrt } = Math;
+
 /**
  * @typedef {object} Solid
  * @property {[number, number, number, number]} box  ex and ey from, to
@@ -18,13 +21,13 @@ const discBox = (camera, q, radius) => {
 };
 
 const joinBoxes = (boxes) => [
-  Math.min(...boxes.map((b) => b[0])),
-  Math.max(...boxes.map((b) => b[1])),
-  Math.min(...boxes.map((b) => b[2])),
-  Math.max(...boxes.map((b) => b[3])),
+  min(...boxes.map((b) => b[0])),
+  max(...boxes.map((b) => b[1])),
+  min(...boxes.map((b) => b[2])),
+  max(...boxes.map((b) => b[3])),
 ];
 
-const obliquity = (ex, ey, d) => Math.sqrt(1 + (ex * ex + ey * ey) / (d * d));
+const obliquity = (ex, ey, d) => sqrt(1 + (ex * ex + ey * ey) / (d * d));
 
 /** Ellipsoid; `axes` are three unit vectors square on each other. @returns {Solid} */
 export function ellipsoid(camera, centre, radii, axes = [[1, 0, 0], [0, 1, 0], [0, 0, 1]]) {
@@ -32,7 +35,7 @@ export function ellipsoid(camera, centre, radii, axes = [[1, 0, 0], [0, 1, 0], [
   const c = toCamera(camera, centre);
   const m = axes.map((v, i) => scale(turnToCamera(camera, v), 1 / radii[i]));
   return {
-    box: discBox(camera, c, Math.max(...radii)),
+    box: discBox(camera, c, max(...radii)),
     chord(ex, ey) {
       const ox = ex - c[0];
       const oy = ey - c[1];
@@ -48,7 +51,7 @@ export function ellipsoid(camera, centre, radii, axes = [[1, 0, 0], [0, 1, 0], [
         k += o * o;
       }
       const disc = b * b - a * k;
-      return disc > 0 ? ((2 * Math.sqrt(disc)) / a) * obliquity(ex, ey, d) : 0;
+      return disc > 0 ? ((2 * sqrt(disc)) / a) * obliquity(ex, ey, d) : 0;
     },
   };
 }
@@ -65,15 +68,15 @@ function cappedBall(ex, ey, d, c, n, r, rim) {
   const b = vx * ox + vy * oy - c[2];
   const disc = b * b - a * (ox * ox + oy * oy + c[2] * c[2] - r * r);
   if (disc <= 0) return 0;
-  const root = Math.sqrt(disc);
+  const root = sqrt(disc);
   let s0 = (-b - root) / a;
   let s1 = (-b + root) / a;
   const slope = n[0] * vx + n[1] * vy + n[2];
   const start = n[0] * ox + n[1] * oy - n[2] * c[2] - rim;
-  if (Math.abs(slope) < 1e-9) return start < 0 ? s1 - s0 : 0;
+  if (abs(slope) < 1e-9) return start < 0 ? s1 - s0 : 0;
   const cut = -start / slope;
-  if (slope > 0) s1 = Math.min(s1, cut);
-  else s0 = Math.max(s0, cut);
+  if (slope > 0) s1 = min(s1, cut);
+  else s0 = max(s0, cut);
   return s1 > s0 ? s1 - s0 : 0;
 }
 
@@ -93,7 +96,7 @@ export function cappedShell(camera, centre, opening, outer, inner, rim = 0, inne
       const whole = cappedBall(ex, ey, d, c, n, outer, rim);
       if (whole === 0) return 0;
       const hollow = inner > 0 ? cappedBall(ex, ey, d, ci, n, inner, rim - innerShift) : 0;
-      return Math.max(0, whole - hollow) * obliquity(ex, ey, d);
+      return max(0, whole - hollow) * obliquity(ex, ey, d);
     },
   };
 }
@@ -115,19 +118,19 @@ export function frustum(camera, from, to, r0, r1) {
       const vt = dot(v, t);
       let lo = -1e9;
       let hi = 1e9;
-      if (Math.abs(vt) > 1e-9) {
-        lo = Math.min(-ot / vt, (len - ot) / vt);
-        hi = Math.max(-ot / vt, (len - ot) / vt);
+      if (abs(vt) > 1e-9) {
+        lo = min(-ot / vt, (len - ot) / vt);
+        hi = max(-ot / vt, (len - ot) / vt);
       } else if (ot < 0 || ot > len) return 0;
       const radius = r0 + slope * ot;
       const a = dot(v, v) - vt * vt - slope * slope * vt * vt;
       const b = dot(o, v) - ot * vt - radius * slope * vt;
       const k = dot(o, o) - ot * ot - radius * radius;
       const disc = b * b - a * k;
-      if (a <= 0) return k < 0 || disc < 0 ? 0 : Math.max(0, hi - lo) * obliquity(ex, ey, d);
+      if (a <= 0) return k < 0 || disc < 0 ? 0 : max(0, hi - lo) * obliquity(ex, ey, d);
       if (disc <= 0) return 0;
-      lo = Math.max(lo, (-b - Math.sqrt(disc)) / a);
-      hi = Math.min(hi, (-b + Math.sqrt(disc)) / a);
+      lo = max(lo, (-b - sqrt(disc)) / a);
+      hi = min(hi, (-b + sqrt(disc)) / a);
       return hi > lo ? (hi - lo) * obliquity(ex, ey, d) : 0;
     },
   };
@@ -144,10 +147,10 @@ function seenSection(camera, node, axis, across) {
   const b = cross(t, a);
   const along = dot(view, t);
   const inSection = sub(view, scale(t, along));
-  const sin = Math.max(0.22, length(inSection));
+  const sin = max(0.22, length(inSection));
   const cosA = dot(inSection, a) / sin;
   const cosB = dot(inSection, b) / sin;
-  const half = Math.sqrt((node.a * cosB) ** 2 + (node.b * cosA) ** 2);
+  const half = sqrt((node.a * cosB) ** 2 + (node.b * cosA) ** 2);
   const f = 1 / (1 - q[2] / camera.sourceMm);
   return { x: q[0] * f, y: q[1] * f, half: half * f, chord: (2 * node.a * node.b) / half / sin };
 }
@@ -160,7 +163,7 @@ function seenSection(camera, node, axis, across) {
  */
 export function loft(camera, nodes, across, roundEnds = false) {
   const parts = nodes.map((node, i) => {
-    const axis = unit(sub(nodes[Math.min(i + 1, nodes.length - 1)].p, nodes[Math.max(i - 1, 0)].p));
+    const axis = unit(sub(nodes[min(i + 1, nodes.length - 1)].p, nodes[max(i - 1, 0)].p));
     const flat = sub(across, scale(axis, dot(across, axis)));
     const side = length(flat) > 1e-6 ? unit(flat) : unit(cross(axis, [axis[1], axis[2], axis[0]]));
     return seenSection(camera, node, axis, side);
@@ -187,7 +190,7 @@ export function loft(camera, nodes, across, roundEnds = false) {
           chord = mix(s.chord, e.chord, t);
         }
       }
-      return best < 1 ? chord * Math.sqrt(1 - best) : 0;
+      return best < 1 ? chord * sqrt(1 - best) : 0;
     },
   };
 }
@@ -199,9 +202,9 @@ export function threadedRod(camera, from, to, core, ridge, pitchMm) {
   const [fp, fq] = [p, q].map((v) => 1 / (1 - v[2] / camera.sourceMm));
   const dx = q[0] * fq - p[0] * fp;
   const dy = q[1] * fq - p[1] * fp;
-  const seen = Math.hypot(dx, dy);
+  const seen = hypot(dx, dy);
   const len = length(sub(q, p));
-  const sin = Math.max(0.25, seen / fp / len);
+  const sin = max(0.25, seen / fp / len);
   const turns = len / pitchMm;
   return {
     box: joinBoxes([discBox(camera, p, core + ridge), discBox(camera, q, core + ridge)]),
@@ -212,10 +215,10 @@ export function threadedRod(camera, from, to, core, ridge, pitchMm) {
       if (t < 0 || t > 1) return 0;
       const off = (ox * dy - oy * dx) / seen / mix(fp, fq, t);
       const phase = t * turns + (off > 0 ? 0.5 : 0);
-      const saw = 1 - 2 * Math.abs(phase - Math.floor(phase) - 0.5);
-      const taper = Math.min(1, (1 - t) * len * 0.35 + 0.15);
-      const r = (core + ridge * Math.max(0, 1.6 * saw - 0.6)) * taper;
-      return Math.abs(off) < r ? (2 * Math.sqrt(r * r - off * off)) / sin : 0;
+      const saw = 1 - 2 * abs(phase - floor(phase) - 0.5);
+      const taper = min(1, (1 - t) * len * 0.35 + 0.15);
+      const r = (core + ridge * max(0, 1.6 * saw - 0.6)) * taper;
+      return abs(off) < r ? (2 * sqrt(r * r - off * off)) / sin : 0;
     },
   };
 }
@@ -227,7 +230,7 @@ export const fused = (parts) => ({
     let longest = 0;
     for (const p of parts) {
       const b = p.box;
-      if (ex >= b[0] && ex <= b[1] && ey >= b[2] && ey <= b[3]) longest = Math.max(longest, p.chord(ex, ey));
+      if (ex >= b[0] && ex <= b[1] && ey >= b[2] && ey <= b[3]) longest = max(longest, p.chord(ex, ey));
     }
     return longest;
   },
