@@ -66,7 +66,8 @@ export function nodeService({ title, workspace, logFile, env, isReady, readyWith
       file: process.execPath,
       args: [join(root, workspace, 'dist/main.js')],
       cwd: root,
-      env: { ...process.env, ...env },
+      // Logs are files: no colours.
+      env: { ...process.env, NO_COLOR: '1', ...env },
     }),
   });
 }
