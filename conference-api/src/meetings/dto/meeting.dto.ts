@@ -96,6 +96,7 @@ export class MeetingActionsDto {
 export class MeetingDto extends MeetingSummaryDto {
   startedAt: string | null;
   closedAt: string | null;
+  cancelledReason: string | null;
   version: number;
   items: AgendaItemDto[];
   attendance: AttendanceDto[];

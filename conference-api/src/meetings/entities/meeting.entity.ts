@@ -22,6 +22,10 @@ export class Meeting {
   @Column({ type: 'datetime', precision: 3 })
   slotAt: Date;
 
+  /** False where it was put in by hand, outside the slot's rule. */
+  @Column({ default: true })
+  ofSlot: boolean;
+
   @Column({ type: 'datetime', precision: 3 })
   startsAt: Date;
 
@@ -41,6 +45,13 @@ export class Meeting {
   /** How often an agenda went out; the iCalendar SEQUENCE is one less. */
   @Column('int', { default: 0 })
   agendaSendings: number;
+
+  /** The `version` that was last sent, so that an unchanged agenda is not sent twice. */
+  @Column({ type: 'int', nullable: true })
+  agendaSentVersion: number | null;
+
+  @Column({ type: 'text', nullable: true })
+  cancelledReason: string | null;
 
   @Column({ type: 'datetime', precision: 3, nullable: true })
   startedAt: Date | null;
