@@ -1,4 +1,6 @@
 import { Module } from '@nestjs/common';
+import { CalculatorsController } from './calculators.controller.js';
+import { CalculatorsService } from './calculators.service.js';
 
-@Module({})
+@Module({ controllers: [CalculatorsController], providers: [CalculatorsService] })
 export class CalculatorsModule {}
