@@ -1,5 +1,7 @@
 import { ApiProperty } from '@nestjs/swagger';
+import { Type } from 'class-transformer';
 import { IsInt, IsOptional, IsUUID, Max, Min } from 'class-validator';
+import { READINESS_WEIGHTS, type ReadinessWeight } from '../../calc/cases/readiness.js';
 import { CONTENT_SECTIONS, type ContentSection } from '../../calc/vocabulary/case-content.js';
 import { JOINTS, type Joint, SECTIONS, type Section, SIDES, type Side, type Stage, STAGES, URGENCIES, type Urgency } from '../../calc/vocabulary/case.js';
 import { PersonRefDto } from '../../common/people/person-ref.dto.js';
@@ -161,9 +163,6 @@ export class ReleaseCaseDto {
   baseVersion: number;
 }
 
-export const READINESS_WEIGHTS = ['blocks-posting', 'blocks-listing', 'advice'] as const;
-export type ReadinessWeight = (typeof READINESS_WEIGHTS)[number];
-
 export class ReadinessItemDto {
   id: string;
   @ApiProperty({ enum: SECTIONS }) section: Section;
@@ -211,6 +210,7 @@ export class DifferencesDto {
 export class DifferencesQueryDto {
   /** Compare with this version; the one before when left out. */
   @IsOptional()
+  @Type(() => Number)
   @IsInt()
   @Min(1)
   since?: number;
