@@ -77,7 +77,7 @@ const CASES = {
     seed: 110, side: 'right', rollDeg: 0.5, ...LONG_FILM, body: { size: 1.06 },
     shell: { outerMm: 54, inclinationDeg: 41, versionDeg: 18, heightMm: 17, lateralMm: 31 },
     head: { diameterMm: 32 },
-    stem: { kind: 'cemented', fractureAt: -88, fractureShift: [-0.6, 1.2], fractureTurnDeg: -4 },
+    stem: { kind: 'cemented', fractureAt: -88, fractureShift: [-1.6, -1.2], fractureTurnDeg: -7 },
     femurCavities: [{ atMm: [52, -46], radiusMm: 6 }, { atMm: [31, -52], radiusMm: 5 }],
   },
   'jumbo-shell': {
@@ -119,6 +119,11 @@ const CASES = {
   },
 };
 
+const KNEE = {
+  seed: 116, side: 'right', projection: 'ap-knee', width: 900, height: 1200, pixelSpacingMm: 0.25, magnification: 1.1,
+  knee: { trayVarusDeg: 5, lucencyMm: 2 },
+};
+
 const film = (caseKey, view, interval, caption, extra = {}) => {
   const spec = { ...CASES[caseKey], ...extra };
   return { fileName: `${caseKey}-${view}.dcm`, caseKey, projection: spec.projection ?? 'ap-pelvis', side: spec.side, interval, caption, spec };
@@ -126,7 +131,8 @@ const film = (caseKey, view, interval, caption, extra = {}) => {
 
 /**
  * @returns {{fileName: string, caseKey: string, projection: string, side: string, interval: string, caption: string, spec: object}[]}
- *   `interval` counts from the last operation on that joint
+ *   `interval` counts from the last operation on that joint; the entry 'photograph' is for
+ *   `drawPhotograph` and JPEG, all others for `drawRadiograph`
  */
 export function demoImages() {
   return [
@@ -153,5 +159,7 @@ export function demoImages() {
     film('lysis-late', 'ap', '13 years', 'Worn liner, cavities above the shell and in the ischium, shell has not moved'),
     film('long-leg', 'ap', '8 months', 'Operated leg longer'),
     film('long-stem', 'ap', '7 years', 'Long stem after an earlier revision, three cables'),
+    { fileName: 'loose-knee-tray-ap.dcm', caseKey: 'loose-knee-tray', projection: 'ap-knee', side: 'right', interval: '8 years', caption: 'Tray in varus with a lucent line under it', spec: KNEE },
+    { fileName: 'infected-fixed-shell-photograph.jpg', caseKey: 'infected-fixed-shell', projection: 'photograph', side: 'left', interval: '3 years', caption: 'A shell after removal, outside and inside, ruler in mm', spec: { outerMm: 58 } },
   ];
 }

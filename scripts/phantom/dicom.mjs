@@ -14,6 +14,13 @@ export function uidFor(words) {
   return `2.25.${BigInt(`0x${hex}`)}`;
 }
 
+/** EXIF of an invented photographer and place, for the same tests. */
+export const PLANTED_EXIF = {
+  IFD0: { Artist: 'Oswin Marrowby', ImageDescription: 'Shell of T Quillfeather, QF-7730142', Copyright: 'Plumwick General', DateTime: '2021:03:12 09:15:33' },
+  IFD2: { UserComment: 'Quillfeather, theatre 3', DateTimeOriginal: '2021:03:12 09:15:33', BodySerialNumber: 'CAM-55190-PW' },
+  IFD3: { GPSLatitudeRef: 'N', GPSLatitude: '51/1 30/1 0/1', GPSLongitudeRef: 'W', GPSLongitude: '0/1 7/1 0/1' },
+};
+
 /** Invented identifiers for tests that must find every one of them gone. */
 export const PLANTED = {
   PatientName: 'QUILLFEATHER^TAMSIN',
@@ -57,7 +64,7 @@ function spacingTags(truth, meta) {
     ...tags,
     PixelSpacing: [round(truth.mmPerPixelAtHip), round(truth.mmPerPixelAtHip)],
     PixelSpacingCalibrationType: 'GEOMETRY',
-    PixelSpacingCalibrationDescription: 'Scaled to the plane of the hip centres',
+    PixelSpacingCalibrationDescription: 'Scaled to the plane of the joint',
   };
 }
 

@@ -132,6 +132,14 @@ function collimate(pixels, spec) {
   }
 }
 
+// Share of large differences taken away, edge emphasis, share of the film darker than soft tissue.
+const PROCESSING = {
+  'ap-pelvis': { even: 0.62, emphasis: 0.55, level: 0.3 },
+  oblique: { even: 0.62, emphasis: 0.55, level: 0.3 },
+  lateral: { even: 0.86, emphasis: 0.55, level: 0.47 },
+  'ap-knee': { even: 0.6, emphasis: 0.5, level: 0.56 },
+};
+
 const TONES = 16384;
 
 /** Grey values for 0 to twice the range: a straight part and a shoulder for metal. */
@@ -147,8 +155,7 @@ function toneCurve() {
 export function expose(sheet, spec) {
   const { width, height } = sheet;
   const film = detect(sheet, spec);
-  const lateral = spec.projection === 'lateral';
-  const { even = lateral ? 0.86 : 0.62, emphasis = 0.55, level = lateral ? 0.47 : 0.3 } = spec.exposure;
+  const { even, emphasis, level } = { ...PROCESSING[spec.projection], ...spec.exposure };
   const small = shrink(sheet.tissue, width, height);
   for (let i = 0; i < small.data.length; i++) small.data[i] = clamp(small.data[i], 1.2, 8.5);
   const base = rowsOf({ ...small, data: blur(small.data, small.w, small.h, 9) }, width);

@@ -55,7 +55,7 @@ function shaftThickness(sheet, frame) {
  */
 export function breakLine(camera, frame, path, seed) {
   const random = seededRandom(seed);
-  const jagged = curve(path, { steps: 7 }).map(([x, y, z = 0], i) => [x, y + (i % 2 ? 1 : -1) * (0.4 + 1.5 * random()), z]);
+  const jagged = curve(path, { steps: 7 }).map(([x, y, z = 0], i) => [x, y + (i % 2 ? 1 : -1) * (0.2 + 0.9 * random()), z]);
   const line = jagged.map((p) => toPlane(camera, frame.toPatient(p)));
   const order = line[0][0] < line[line.length - 1][0] ? line : [...line].reverse();
   return (ex, ey) => {

@@ -2,11 +2,11 @@
 // Axes for a left knee: x lateral, y cranial, origin in the joint line.
 
 import { addBone, addSpot, cloudiness, MU, place, thicknessField, trabeculae } from './bones.mjs';
-import { add, curve, DEG, makeCamera, project, scale } from './geometry.mjs';
+import { curve, DEG, makeCamera, project } from './geometry.mjs';
 import { coarse, eachPixel, outlineBox, outlineDistance, planeOutline } from './raster.mjs';
 import { ellipsoid } from './solids.mjs';
 
-const { abs, cos, max, sin, sqrt } = Math;
+const { abs, cos, sign, sin, sqrt } = Math;
 
 const FEMUR = [
   [-14, 170, 0, 5.6, 14], [-14.4, 120, 0, 5, 14], [-17, 85, 0, 3, 14], [-26, 60, 0, 1.6, 12], [-38, 42, 0, 1.1, 10], [-42, 28, 0, 1, 10], [-40, 12, 0, 0.9, 10], [-30, 5, 0, 0.8, 10],
@@ -70,8 +70,9 @@ export function addKnee(sheet, spec, sideSign) {
   bone(FEMUR, [[0, 140, 0, 28, 30], [0, 80, 0, 31, 12], [-26, 24, 0, 46, 16], [26, 24, 0, 46, 16], [0, 26, 0, 32, 9]], 1.2, 1.5);
   bone(TIBIA, [[0, -30, 0, 44, 16], [0, -70, 0, 32, 14], [0, -140, 0, 26, 40]], 1.2, 1.6);
   addSpot(sheet, ellipsoid(camera, [0, 34, 40], [21, 22, 10]), MU.spongy * 1.5, 0.15);
-  const tray = side(turned(TRAY, trayVarusDeg));
-  if (lucencyMm) addPart(sheet, side(turned(TRAY.map(([x, y]) => [x + Math.sign(x) * lucencyMm * 0.8, y < -14.5 ? y - lucencyMm : y]), trayVarusDeg)), 30, -MU.spongy * 0.8, 1);
+  const sunk = -20 * abs(sin(trayVarusDeg * DEG));
+  const tray = side(turned(TRAY, trayVarusDeg, sunk));
+  if (lucencyMm) addPart(sheet, side(turned(TRAY.map(([x, y]) => [x + sign(x) * lucencyMm * 0.8, y < -14.5 ? y - lucencyMm : y]), trayVarusDeg, sunk)), 30, -MU.spongy * 0.45, 1);
   addPart(sheet, tray, 22, MU.titanium, 1.2);
   addPart(sheet, curve(side(turned(CAP, 0)), { closed: true, steps: 4 }), 26, MU.cobalt * 0.35, 4);
 }
@@ -79,12 +80,8 @@ export function addKnee(sheet, spec, sideSign) {
 /** The knee's numbers: angle of the tray's upper edge against the tibia's axis, varus positive. */
 export function kneeTruth(spec, camera, sideSign) {
   const { trayVarusDeg = 0 } = spec.knee ?? {};
-  const at = (p) => {
-    const q = project(camera, p);
-    return { x: max(0, q.x), y: max(0, q.y) };
-  };
-  const [inner, outer] = place(turned(TRAY.slice(0, 2), trayVarusDeg), sideSign);
-  const axis = [[0, -60, 0], [0, -150, 0]].map((p) => at(add(p, scale([sideSign, 0, 0], 0.2))));
+  const at = (p) => project(camera, p);
+  const [inner, outer] = place(turned(TRAY.slice(0, 2), trayVarusDeg, -20 * abs(sin(trayVarusDeg * DEG))), sideSign);
   return {
     side: spec.side,
     projection: spec.projection,
@@ -93,6 +90,6 @@ export function kneeTruth(spec, camera, sideSign) {
     magnification: spec.magnification,
     mmPerPixelAtHip: spec.pixelSpacingMm / spec.magnification,
     tray: { varusDeg: trayVarusDeg, widthMm: 74, innerPx: at(inner), outerPx: at(outer) },
-    tibialAxisPx: axis,
+    tibialAxisPx: [at([0, -60, 0]), at([0, -150, 0])],
   };
 }

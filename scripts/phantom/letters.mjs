@@ -50,6 +50,10 @@ function strokeText(width, height, text, left, top, size, pen, paint) {
   cover.forEach((c, k) => paint(k, c));
 }
 
+/** Text of a given height in px with a pen that suits it. */
+export const textOnto = (width, height, text, left, top, size, paint) =>
+  strokeText(width, height, text, left, top, size, size * 0.075, paint);
+
 /** Lead letter of the side on the cassette, on the side's own edge of the film. */
 export function leadMarker(sheet, spec) {
   if (spec.marker === false) return;
@@ -72,7 +76,7 @@ export function burnIn(pixels, spec) {
   return spec.burnedIn.map((text, line) => {
     const x = Math.round(0.02 * spec.width + 14);
     const y = Math.round(0.02 * spec.height + 14 + line * size * 1.7);
-    strokeText(spec.width, spec.height, text, x, y, size, size * 0.062, (k, c) => {
+    strokeText(spec.width, spec.height, text, x, y, size, size * 0.075, (k, c) => {
       pixels[k] = Math.round(pixels[k] + (4095 - pixels[k]) * c);
     });
     return { text, box: { x, y, width: Math.ceil(textSegments(text).width * size), height: size } };

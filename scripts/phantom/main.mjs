@@ -5,13 +5,20 @@ import { mkdir, writeFile } from 'node:fs/promises';
 import { basename, join } from 'node:path';
 import { parseArgs } from 'node:util';
 import { demoImages } from './demo-images.mjs';
-import { PLANTED, toDicom } from './dicom.mjs';
-import { toPng } from './png.mjs';
+import { PLANTED, PLANTED_EXIF, toDicom } from './dicom.mjs';
+import { drawPhotograph } from './photograph.mjs';
+import { toJpeg, toPng } from './png.mjs';
 import { drawRadiograph } from './render.mjs';
 
 const BURNED_IN = ['QUILLFEATHER TAMSIN', 'QF-7730142  23/06/1951', 'PLUMWICK GENERAL 12/03/2021'];
 
+async function writePhotograph(entry, out, planted) {
+  const picture = drawPhotograph({ ...entry.spec, burnedIn: planted ? BURNED_IN : [] });
+  await writeFile(join(out, entry.fileName), await toJpeg(picture, planted ? { exif: PLANTED_EXIF } : {}));
+}
+
 async function writeOne(entry, out, planted) {
+  if (entry.projection === 'photograph') return writePhotograph(entry, out, planted);
   const name = basename(entry.fileName, '.dcm');
   const image = drawRadiograph({ ...entry.spec, burnedIn: planted ? BURNED_IN : [] });
   const meta = { name, study: `${entry.caseKey} ${entry.interval}` };

@@ -1,4 +1,4 @@
-// Eight-bit greyscale PNG of a drawn radiograph.
+// Drawn radiographs as eight-bit greyscale PNG, drawn photographs as JPEG.
 
 import sharp from 'sharp';
 
@@ -18,4 +18,15 @@ export function toPng(image, { window = { center: 2047.5, width: 4095 } } = {}) 
     .toColourspace('b-w')
     .png({ compressionLevel: 6 })
     .toBuffer();
+}
+
+/**
+ * @param {{width: number, height: number, rgb: Uint8Array}} photograph
+ * @param {{exif?: object}} options EXIF by directory as sharp takes it, to plant identifiers in tests
+ * @returns {Promise<Buffer>}
+ */
+export function toJpeg(photograph, { exif } = {}) {
+  const { width, height, rgb } = photograph;
+  const picture = sharp(rgb, { raw: { width, height, channels: 3 } }).jpeg({ quality: 88 });
+  return (exif ? picture.withExif(exif) : picture).toBuffer();
 }
