@@ -7,7 +7,7 @@ import { PageSkeleton } from '@/components/page-states';
 import { useMe, useSession } from '@/lib/auth/session';
 import { useLiveEvents } from '@/lib/live-events/use-live-events';
 import { paths } from './paths';
-import { ADMIN_LINKS, WORK_LINKS } from './shell-links';
+import { setUpLinks, WORK_LINKS } from './shell-links';
 import styles from './app-shell.module.css';
 
 /** Keyboard and screen-reader users begin at the new page, not at the old link. */
@@ -57,7 +57,7 @@ function AccountMenu() {
 function PhoneMenu() {
   const me = useMe();
   const navigate = useNavigate();
-  const links = me.isAdministrator ? [...WORK_LINKS, ...ADMIN_LINKS] : WORK_LINKS;
+  const links = [...WORK_LINKS, ...setUpLinks(me)];
   return (
     <DropdownMenu.Root>
       <DropdownMenu.Trigger>
@@ -89,7 +89,7 @@ const Links = ({ links }: { links: typeof WORK_LINKS }) =>
 /** The bar on top of every signed-in page, and the live updates below it. */
 export function AppShell() {
   useLiveEvents();
-  const me = useMe();
+  const setUp = setUpLinks(useMe());
   const main = useFocusOnNavigation();
   return (
     <>
@@ -104,9 +104,9 @@ export function AppShell() {
           </Link>
           <nav className={styles.links} aria-label="Main">
             <Links links={WORK_LINKS} />
-            {me.isAdministrator && (
+            {setUp.length > 0 && (
               <div className={styles.apart}>
-                <Links links={ADMIN_LINKS} />
+                <Links links={setUp} />
               </div>
             )}
           </nav>

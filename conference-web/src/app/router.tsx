@@ -41,12 +41,13 @@ export const createRouter = () =>
                     { path: '/decisions', lazy: () => import('./routes/decision-list') },
                     { path: '/decisions/:id', lazy: () => import('./routes/decision') },
                     { path: '/account', lazy: () => import('./routes/account') },
+                    // a chair sets up the own conference
+                    { path: '/admin/conferences', lazy: () => import('./routes/admin-conferences') },
                     {
                       path: '/admin',
                       Component: RequireAdministrator,
                       children: [
                         { path: 'people', lazy: () => import('./routes/admin-people') },
-                        { path: 'conferences', lazy: () => import('./routes/admin-conferences') },
                         { path: 'mail', lazy: () => import('./routes/admin-mail') },
                         { path: 'audit', lazy: () => import('./routes/admin-audit') },
                       ],

@@ -49,6 +49,7 @@ export const keys = {
     one: (id: string) => ['people', 'one', id] as const,
   },
   units: ['units'] as const,
+  mails: ['mail'] as const,
   mail: (filter: object) => ['mail', filter] as const,
   audit: (filter: object) => ['audit', filter] as const,
   invitation: (token: string) => ['invitation', token] as const,

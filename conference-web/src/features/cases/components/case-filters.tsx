@@ -1,7 +1,7 @@
 import { JOINT_WORDS, STAGE_WORDS, STAGES, URGENCY_WORDS } from '@kerfside/calc/vocabulary/case.js';
 import { Button } from '@radix-ui/themes';
-import { type ReactNode, useEffect, useRef, useState } from 'react';
-import { useSearchKey } from '@/components/keys/use-key';
+import { type ReactNode, useCallback, useState } from 'react';
+import { SearchBox } from '@/components/search-box';
 import { useMe } from '@/lib/auth/session';
 import type { CaseListFilter } from '../api/list-cases';
 import { countFilters, SORTS } from '../list-state';
@@ -57,40 +57,16 @@ const Check = ({ label, on, onSwitch }: { label: ReactNode; on: boolean; onSwitc
   </label>
 );
 
-const SEARCH_PAUSE_MS = 300;
-
-/** Asks once the typing rests, and writes the address without a step in the history for each letter. */
-function Search({ filter, onChange }: Pick<FiltersProps, 'filter' | 'onChange'>) {
-  const field = useRef<HTMLInputElement>(null);
-  useSearchKey(field);
-  const given = filter.query ?? '';
-  const [text, setText] = useState(given);
-  const [lastGiven, setLastGiven] = useState(given);
-  if (given !== lastGiven) {
-    setLastGiven(given);
-    if (given !== text.trim()) setText(given);
-  }
-  useEffect(() => {
-    if (text.trim() === given) return;
-    const timer = setTimeout(() => onChange({ query: text.trim() || undefined }, { replace: true }), SEARCH_PAUSE_MS);
-    return () => clearTimeout(timer);
-  }, [text, given, onChange]);
-  return (
-    <label className={`${styles.control} ${styles.search}`}>
-      Search in the cases
-      <input ref={field} type="search" maxLength={200} value={text} onChange={(event) => setText(event.target.value)} />
-    </label>
-  );
-}
-
 export function CaseFilters({ filter, onChange, onSort }: FiltersProps) {
   const me = useMe();
   const [isOpen, setOpen] = useState(false);
+  // each letter must not become a step in the history
+  const search = useCallback((text: string) => onChange({ query: text || undefined }, { replace: true }), [onChange]);
   const count = countFilters(filter);
   const conferences = Object.fromEntries(me.memberships.map(({ conferenceId, conferenceName }) => [conferenceId, conferenceName]));
   return (
     <div role="search" className={styles.filters}>
-      <Search filter={filter} onChange={onChange} />
+      <SearchBox label="Search in the cases" value={filter.query ?? ''} onSearch={search} />
       <Button className={styles.toggle} variant="soft" color="gray" aria-expanded={isOpen} onClick={() => setOpen(!isOpen)}>
         {count ? `Filter and sort (${count})` : 'Filter and sort'}
       </Button>
