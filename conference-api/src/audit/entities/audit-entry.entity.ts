@@ -15,13 +15,13 @@ export class AuditEntry {
   @Column({ type: 'uuid', nullable: true })
   personId: string | null;
 
-  @Column({ length: 60 })
+  @Column({ type: 'varchar', length: 60 })
   action: string;
 
-  @Column({ length: 40 })
+  @Column({ type: 'varchar', length: 40 })
   recordKind: string;
 
-  @Column({ length: 64 })
+  @Column({ type: 'varchar', length: 64 })
   recordId: string;
 
   @Column({ type: 'uuid', nullable: true })
@@ -30,7 +30,7 @@ export class AuditEntry {
   @Column({ type: 'uuid', nullable: true })
   conferenceId: string | null;
 
-  @Column({ length: 64, default: '' })
+  @Column({ type: 'varchar', length: 64, default: '' })
   address: string;
 
   /** Names of fields, stages, counts. */

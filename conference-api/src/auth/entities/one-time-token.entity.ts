@@ -7,7 +7,7 @@ export class OneTimeToken {
   @PrimaryColumn({ type: 'char', length: 64 })
   hash: string;
 
-  @Column({ length: 20 })
+  @Column({ type: 'varchar', length: 20 })
   purpose: 'invitation' | 'password-reset';
 
   @Index()

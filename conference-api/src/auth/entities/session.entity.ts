@@ -14,10 +14,10 @@ export class Session {
   @JoinColumn({ name: 'personId' })
   person: Relation<Person>;
 
-  @Column({ length: 255 })
+  @Column({ type: 'varchar', length: 255 })
   device: string;
 
-  @Column({ length: 64 })
+  @Column({ type: 'varchar', length: 64 })
   address: string;
 
   @CreateDateColumn({ precision: 3, default: () => 'CURRENT_TIMESTAMP(3)' })

@@ -12,7 +12,7 @@ export class SignInFailure {
   @Column({ type: 'char', length: 64 })
   account: string;
 
-  @Column({ length: 64 })
+  @Column({ type: 'varchar', length: 64 })
   address: string;
 
   @Column({ type: 'datetime', precision: 3 })

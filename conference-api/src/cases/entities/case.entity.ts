@@ -19,7 +19,7 @@ export class Case {
   conference: Relation<Conference>;
 
   /** Conference code and running number, for example HIP-0042. */
-  @Column({ length: 16, unique: true })
+  @Column({ type: 'varchar', length: 16, unique: true })
   code: string;
 
   @Column('uuid')
@@ -36,19 +36,19 @@ export class Case {
   @JoinColumn({ name: 'treatingSurgeonId' })
   treatingSurgeon: Relation<Person>;
 
-  @Column({ length: 12, default: 'draft' })
+  @Column({ type: 'varchar', length: 12, default: 'draft' })
   stage: Stage;
 
-  @Column({ length: 160, default: '' })
+  @Column({ type: 'varchar', length: 160, default: '' })
   title: string;
 
   @Column({ type: 'varchar', length: 8, nullable: true })
   side: Side | null;
 
-  @Column({ length: 8, default: 'hip' })
+  @Column({ type: 'varchar', length: 8, default: 'hip' })
   joint: Joint;
 
-  @Column({ length: 8, default: 'routine' })
+  @Column({ type: 'varchar', length: 8, default: 'routine' })
   urgency: Urgency;
 
   /** All sections as structured fields. */

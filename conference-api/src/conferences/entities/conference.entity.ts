@@ -7,23 +7,23 @@ export class Conference {
   @PrimaryGeneratedColumn('uuid')
   id: string;
 
-  @Column({ length: 120, unique: true })
+  @Column({ type: 'varchar', length: 120, unique: true })
   name: string;
 
   /** Begins the case codes, for example HIP. */
-  @Column({ length: 6, unique: true })
+  @Column({ type: 'varchar', length: 6, unique: true })
   code: string;
 
   /** IANA name, for example Europe/London. */
-  @Column({ length: 64 })
+  @Column({ type: 'varchar', length: 64 })
   timeZone: string;
 
   /** First meeting, local to the time zone: YYYY-MM-DDTHH:mm. */
-  @Column({ length: 16 })
+  @Column({ type: 'varchar', length: 16 })
   slotStart: string;
 
   /** RFC 5545, without the prefix. */
-  @Column({ length: 200, default: 'FREQ=WEEKLY' })
+  @Column({ type: 'varchar', length: 200, default: 'FREQ=WEEKLY' })
   slotRule: string;
 
   @Column('int', { default: 60 })
@@ -36,10 +36,10 @@ export class Conference {
   @Column('json')
   quorumRule: QuorumRule;
 
-  @Column({ length: 20, default: 'rand' })
+  @Column({ type: 'varchar', length: 20, default: 'rand' })
   consensusRule: ConsensusRule;
 
-  @Column({ length: 20, default: 'nobody' })
+  @Column({ type: 'varchar', length: 20, default: 'nobody' })
   namesShown: NamesShown;
 
   /** Last case number given. */

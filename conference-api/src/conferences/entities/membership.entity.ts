@@ -19,7 +19,7 @@ export class Membership {
   @JoinColumn({ name: 'personId' })
   person: Relation<Person>;
 
-  @Column({ length: 20 })
+  @Column({ type: 'varchar', length: 20 })
   role: Role;
 
   @CreateDateColumn({ precision: 3, default: () => 'CURRENT_TIMESTAMP(3)' })

@@ -20,7 +20,7 @@ export class FinalDecision {
   @Column('int')
   version: number;
 
-  @Column({ length: 16 })
+  @Column({ type: 'varchar', length: 16 })
   kind: FinalDecisionKind;
 
   @Column('text')

@@ -17,14 +17,14 @@ export class Thread {
   @JoinColumn({ name: 'caseId' })
   case: Relation<Case>;
 
-  @Column({ length: 10 })
+  @Column({ type: 'varchar', length: 10 })
   anchorKind: AnchorKind;
 
   /** Section name, plan step id or image id; empty for the whole case. */
-  @Column({ length: 64, default: '' })
+  @Column({ type: 'varchar', length: 64, default: '' })
   anchorRef: string;
 
-  @Column({ length: 10 })
+  @Column({ type: 'varchar', length: 10 })
   kind: ThreadKind;
 
   @Column('uuid')

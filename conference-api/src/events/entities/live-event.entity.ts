@@ -11,7 +11,7 @@ export class LiveEvent {
   @Column({ type: 'datetime', precision: 3 })
   at: Date;
 
-  @Column({ length: 30 })
+  @Column({ type: 'varchar', length: 30 })
   kind: LiveEventKind;
 
   @Column({ type: 'uuid', nullable: true })

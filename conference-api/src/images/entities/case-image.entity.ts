@@ -17,17 +17,17 @@ export class CaseImage {
   case: Relation<Case>;
 
   /** storing → ready → removed; a row that stays in storing is swept. */
-  @Column({ length: 10 })
+  @Column({ type: 'varchar', length: 10 })
   state: ImageState;
 
-  @Column({ length: 20, default: 'other' })
+  @Column({ type: 'varchar', length: 20, default: 'other' })
   projection: Projection;
 
   /** When it was made, as an interval: 'before revision', '3 months after'. */
-  @Column({ length: 120, default: '' })
+  @Column({ type: 'varchar', length: 120, default: '' })
   interval: string;
 
-  @Column({ length: 300, default: '' })
+  @Column({ type: 'varchar', length: 300, default: '' })
   caption: string;
 
   @Column('int', { default: 0 })
@@ -44,7 +44,7 @@ export class CaseImage {
   bytes: number;
 
   /** What the file was by its content. */
-  @Column({ length: 20 })
+  @Column({ type: 'varchar', length: 20 })
   sourceKind: 'jpeg' | 'png' | 'webp' | 'tiff' | 'dicom';
 
   /** SHA-256 of the uploaded bytes: the same file twice is noticed. */

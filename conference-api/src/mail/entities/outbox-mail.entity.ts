@@ -9,16 +9,16 @@ export class OutboxMail {
   id: string;
 
   /** What it is for, to whom: one purpose is never sent twice. */
-  @Column({ length: 160, unique: true })
+  @Column({ type: 'varchar', length: 160, unique: true })
   purpose: string;
 
   @Column({ type: 'uuid', nullable: true })
   personId: string | null;
 
-  @Column({ length: 254 })
+  @Column({ type: 'varchar', length: 254 })
   recipient: string;
 
-  @Column({ length: 40 })
+  @Column({ type: 'varchar', length: 40 })
   template: string;
 
   /** Codes, names and links; never clinical text. Emptied of secrets once sent. */
@@ -29,7 +29,7 @@ export class OutboxMail {
   @Column('tinyint', { default: 5 })
   priority: number;
 
-  @Column({ length: 12, default: 'queued' })
+  @Column({ type: 'varchar', length: 12, default: 'queued' })
   state: OutboxState;
 
   @Column('int', { default: 0 })
@@ -45,7 +45,7 @@ export class OutboxMail {
   @Column({ type: 'datetime', precision: 3, nullable: true })
   claimedUntil: Date | null;
 
-  @Column({ length: 120 })
+  @Column({ type: 'varchar', length: 120 })
   messageId: string;
 
   @Column({ type: 'varchar', length: 300, nullable: true })

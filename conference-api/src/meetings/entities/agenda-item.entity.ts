@@ -30,7 +30,7 @@ export class AgendaItem {
   @Column('int')
   minutes: number;
 
-  @Column({ length: 10, default: 'listed' })
+  @Column({ type: 'varchar', length: 10, default: 'listed' })
   state: AgendaItemState;
 
   @Column({ type: 'text', nullable: true })

@@ -19,7 +19,7 @@ export class Attendance {
   @JoinColumn({ name: 'personId' })
   person: Relation<Person>;
 
-  @Column({ length: 10 })
+  @Column({ type: 'varchar', length: 10 })
   state: AttendanceState;
 
   @Column({ type: 'datetime', precision: 3 })

@@ -32,7 +32,7 @@ export class Meeting {
   @Column('int')
   minutes: number;
 
-  @Column({ length: 10, default: 'planned' })
+  @Column({ type: 'varchar', length: 10, default: 'planned' })
   state: MeetingState;
 
   /** When the server sends the agenda by itself. */

@@ -8,13 +8,13 @@ export class Person {
   @PrimaryGeneratedColumn('uuid')
   id: string;
 
-  @Column({ length: 254, unique: true })
+  @Column({ type: 'varchar', length: 254, unique: true })
   email: string;
 
-  @Column({ length: 120 })
+  @Column({ type: 'varchar', length: 120 })
   name: string;
 
-  @Column({ length: 40 })
+  @Column({ type: 'varchar', length: 40 })
   discipline: Discipline;
 
   @Column('uuid')

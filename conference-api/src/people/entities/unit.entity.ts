@@ -6,7 +6,7 @@ export class Unit {
   @PrimaryGeneratedColumn('uuid')
   id: string;
 
-  @Column({ length: 120, unique: true })
+  @Column({ type: 'varchar', length: 120, unique: true })
   name: string;
 
   /** Where letters about its cases go. */
