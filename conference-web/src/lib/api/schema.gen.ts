@@ -617,56 +617,6 @@ export interface paths {
         patch?: never;
         trace?: never;
     };
-    "/api/cases/{caseId}/images": {
-        parameters: {
-            query?: never;
-            header?: never;
-            path?: never;
-            cookie?: never;
-        };
-        get: operations["Images_findOfCase"];
-        put?: never;
-        /** One file; its kind is decided by its content, its metadata are dropped. */
-        post: operations["Images_upload"];
-        delete?: never;
-        options?: never;
-        head?: never;
-        patch?: never;
-        trace?: never;
-    };
-    "/api/images/{id}": {
-        parameters: {
-            query?: never;
-            header?: never;
-            path?: never;
-            cookie?: never;
-        };
-        get?: never;
-        put?: never;
-        post?: never;
-        delete: operations["Images_remove"];
-        options?: never;
-        head?: never;
-        patch: operations["Images_update"];
-        trace?: never;
-    };
-    "/api/images/{id}/file/{size}": {
-        parameters: {
-            query?: never;
-            header?: never;
-            path?: never;
-            cookie?: never;
-        };
-        /** The picture itself, for whoever holds an address that was signed for them and has not expired. */
-        get: operations["Images_file"];
-        put?: never;
-        post?: never;
-        delete?: never;
-        options?: never;
-        head?: never;
-        patch?: never;
-        trace?: never;
-    };
     "/api/cases/{caseId}/threads": {
         parameters: {
             query?: never;
@@ -775,6 +725,56 @@ export interface paths {
         };
         /** Unread remarks by case. */
         get: operations["Discussions_unread"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/api/cases/{caseId}/images": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get: operations["Images_findOfCase"];
+        put?: never;
+        /** One file; its kind is decided by its content, its metadata are dropped. */
+        post: operations["Images_upload"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/api/images/{id}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        post?: never;
+        delete: operations["Images_remove"];
+        options?: never;
+        head?: never;
+        patch: operations["Images_update"];
+        trace?: never;
+    };
+    "/api/images/{id}/file/{size}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /** The picture itself, for whoever holds an address that was signed for them and has not expired. */
+        get: operations["Images_file"];
         put?: never;
         post?: never;
         delete?: never;
@@ -1179,6 +1179,23 @@ export interface paths {
         put?: never;
         /** final → reported; later ones are amendments with a reason. */
         post: operations["Outcomes_write"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/api/calculators/{name}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /** One published calculation; null or absent means not known. The answer names the definition and its cautions. */
+        post: operations["Calculators_calculate"];
         delete?: never;
         options?: never;
         head?: never;
@@ -1858,17 +1875,6 @@ export interface components {
             to: number;
             differences: components["schemas"]["DifferenceDto"][];
         };
-        ImageListDto: {
-            items: components["schemas"]["ImageDto"][];
-        };
-        UpdateImageDto: {
-            /** @enum {string|null} */
-            projection?: "ap-pelvis" | "ap" | "lateral" | "oblique" | "ct" | "photograph" | "other" | null;
-            /** @description As an interval, never a date. */
-            interval?: string;
-            caption?: string;
-            position?: number | null;
-        };
         RemarkDto: {
             /** @description TipTap JSON of the editor’s schema */
             content: {
@@ -1950,6 +1956,17 @@ export interface components {
         UnreadListDto: {
             items: components["schemas"]["UnreadDto"][];
             total: number;
+        };
+        ImageListDto: {
+            items: components["schemas"]["ImageDto"][];
+        };
+        UpdateImageDto: {
+            /** @enum {string|null} */
+            projection?: "ap-pelvis" | "ap" | "lateral" | "oblique" | "ct" | "photograph" | "other" | null;
+            /** @description As an interval, never a date. */
+            interval?: string;
+            caption?: string;
+            position?: number | null;
         };
         RoundOptionDto: {
             id: string;
@@ -2087,6 +2104,7 @@ export interface components {
             plannedMinutes: number;
             startedAt: string | null;
             closedAt: string | null;
+            cancelledReason: string | null;
             version: number;
             items: components["schemas"]["AgendaItemDto"][];
             attendance: components["schemas"]["AttendanceDto"][];
@@ -3339,126 +3357,6 @@ export interface operations {
             };
         };
     };
-    Images_findOfCase: {
-        parameters: {
-            query?: never;
-            header?: never;
-            path: {
-                caseId: string;
-            };
-            cookie?: never;
-        };
-        requestBody?: never;
-        responses: {
-            200: {
-                headers: {
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/json": components["schemas"]["ImageListDto"];
-                };
-            };
-        };
-    };
-    Images_upload: {
-        parameters: {
-            query?: never;
-            header?: never;
-            path: {
-                caseId: string;
-            };
-            cookie?: never;
-        };
-        requestBody: {
-            content: {
-                "multipart/form-data": {
-                    /** Format: binary */
-                    file: string;
-                    projection?: string;
-                    interval?: string;
-                    caption?: string;
-                };
-            };
-        };
-        responses: {
-            201: {
-                headers: {
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/json": components["schemas"]["ImageDto"];
-                };
-            };
-        };
-    };
-    Images_remove: {
-        parameters: {
-            query?: never;
-            header?: never;
-            path: {
-                id: string;
-            };
-            cookie?: never;
-        };
-        requestBody?: never;
-        responses: {
-            204: {
-                headers: {
-                    [name: string]: unknown;
-                };
-                content?: never;
-            };
-        };
-    };
-    Images_update: {
-        parameters: {
-            query?: never;
-            header?: never;
-            path: {
-                id: string;
-            };
-            cookie?: never;
-        };
-        requestBody: {
-            content: {
-                "application/json": components["schemas"]["UpdateImageDto"];
-            };
-        };
-        responses: {
-            200: {
-                headers: {
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/json": components["schemas"]["ImageDto"];
-                };
-            };
-        };
-    };
-    Images_file: {
-        parameters: {
-            query: {
-                /** @description Seconds since 1970. */
-                expires: string;
-                signature: string;
-            };
-            header?: never;
-            path: {
-                id: string;
-                size: string;
-            };
-            cookie?: never;
-        };
-        requestBody?: never;
-        responses: {
-            200: {
-                headers: {
-                    [name: string]: unknown;
-                };
-                content?: never;
-            };
-        };
-    };
     Discussions_findOfCase: {
         parameters: {
             query?: never;
@@ -3655,6 +3553,126 @@ export interface operations {
                 content: {
                     "application/json": components["schemas"]["UnreadListDto"];
                 };
+            };
+        };
+    };
+    Images_findOfCase: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                caseId: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            200: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["ImageListDto"];
+                };
+            };
+        };
+    };
+    Images_upload: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                caseId: string;
+            };
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                "multipart/form-data": {
+                    /** Format: binary */
+                    file: string;
+                    projection?: string;
+                    interval?: string;
+                    caption?: string;
+                };
+            };
+        };
+        responses: {
+            201: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["ImageDto"];
+                };
+            };
+        };
+    };
+    Images_remove: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            204: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+        };
+    };
+    Images_update: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                "application/json": components["schemas"]["UpdateImageDto"];
+            };
+        };
+        responses: {
+            200: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["ImageDto"];
+                };
+            };
+        };
+    };
+    Images_file: {
+        parameters: {
+            query: {
+                /** @description Seconds since 1970. */
+                expires: string;
+                signature: string;
+            };
+            header?: never;
+            path: {
+                id: string;
+                size: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            200: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content?: never;
             };
         };
     };
@@ -4311,6 +4329,38 @@ export interface operations {
                 };
                 content: {
                     "application/json": components["schemas"]["OutcomeDto"];
+                };
+            };
+        };
+    };
+    Calculators_calculate: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                name: "infection-2018" | "infection-2013" | "acetabular-defect" | "cup-orientation" | "cup-ellipse" | "calibration" | "removal-geometry" | "panel" | "agreement" | "ranking" | "proportion" | "agenda-fill" | "meeting-dates" | "identifier-screen" | "charlson";
+            };
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                "application/json": {
+                    [key: string]: unknown;
+                };
+            };
+        };
+        responses: {
+            200: {
+                headers: {
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        definition: string;
+                        cautions: string[];
+                    } & {
+                        [key: string]: unknown;
+                    };
                 };
             };
         };
