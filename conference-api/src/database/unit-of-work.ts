@@ -104,13 +104,16 @@ export class Transaction {
 
 @Injectable()
 export class UnitOfWork {
+  /** The time at which use cases happen; the demo tells its past with another one. */
+  clock = () => new Date();
+
   constructor(private readonly dataSource: DataSource) {}
 
   /** Runs a use case in one transaction, again from the start where it met another one. */
   async run<T>(actor: ActingPerson | null, work: (transaction: Transaction) => Promise<T>): Promise<T> {
     for (let attempt = 1; ; attempt++) {
       try {
-        return await this.dataSource.transaction('READ COMMITTED', (manager) => work(new Transaction(manager, actor)));
+        return await this.dataSource.transaction('READ COMMITTED', (manager) => work(new Transaction(manager, actor, this.clock())));
       } catch (error) {
         if (!isDeadlock(error) || attempt >= 5) throw error;
       }
