@@ -25,7 +25,7 @@ export const PARTS = [
   jest('store', 'object-store-fake', { builds: ['object-store-fake'] }),
   jest('mail', 'mail-fake', { builds: ['mail-fake'] }),
   jest('unit', 'conference-api', { suffix: '\\.spec\\.ts$' }),
-  jest('api-e2e', 'conference-api', { suffix: '\\.e2e-spec\\.ts$', builds: [...FAKES, 'conference-api'], services: true }),
+  jest('api-e2e', 'conference-api', { suffix: '\\.e2e-spec\\.ts$', builds: FAKES, services: true }),
   jest('web', 'conference-web', {}),
   jest('browser', 'conference-web', { config: 'jest.e2e.config.mjs', builds: ALL, services: true, app: true, workers: 1 }),
 ];
