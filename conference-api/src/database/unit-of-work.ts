@@ -43,11 +43,10 @@ export interface MailFacts {
 
 /** One use case: its change, its audit entry, its mails and its live event stand or fall together. */
 export class Transaction {
-  readonly now = new Date();
-
   constructor(
     readonly manager: EntityManager,
     private readonly actor: ActingPerson | null,
+    readonly now: Date,
   ) {}
 
   async audit(facts: AuditFacts): Promise<void> {
