@@ -100,7 +100,8 @@ function ChangeableDrawing({ side, sectors, screws, lost, hour, setHour, onChang
       aria-pressed={onLostChange ? lost.includes(at) : undefined}
       // the first press chooses the hour, the next one numbers it, so that a slip changes nothing
       onPointerDown={() => (wasChosen.current = at === hour)}
-      onClick={() => (wasChosen.current || !onChange ? act(at) : goTo(at))}
+      // a screen reader's press has no pointer (detail 0) and was meant for this hour
+      onClick={(event) => (wasChosen.current || !onChange || event.detail === 0 ? act(at) : goTo(at))}
       onFocus={() => setHour(at)}
     >
       {shape}
