@@ -19,6 +19,7 @@ import {
   SetAttendanceDto,
   UpdateMeetingDto,
 } from './dto/meeting.dto.js';
+import { ListableCasesService } from './listable-cases.service.js';
 import { MeetingRunService } from './meeting-run.service.js';
 import { MeetingsService } from './meetings.service.js';
 
@@ -29,6 +30,7 @@ export class MeetingsController {
     private readonly meetings: MeetingsService,
     private readonly agenda: AgendaService,
     private readonly run: MeetingRunService,
+    private readonly listableCases: ListableCasesService,
   ) {}
 
   /** Meetings of all conferences one belongs to. */
@@ -83,7 +85,7 @@ export class MeetingsController {
   @Get('meetings/:id/listable-cases')
   @RequirePermission(Permission.AgendaWrite)
   listable(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string): Promise<ListableCasesDto> {
-    return this.agenda.findListable(actor, id);
+    return this.listableCases.find(actor, id);
   }
 
   /** The whole agenda at once: cases, minutes, order. */

@@ -82,6 +82,19 @@ export function meetingDates(input: MeetingDatesInput): MeetingDatesAnswer {
   };
 }
 
+/**
+ * The first `count` (1–500) moments of a recurring meeting that lie after `after`, ascending; fewer where
+ * the rule ends. Else as `meetingDates`, whose source it shares.
+ *
+ * @throws CalcInputError as `meetingDates`, but not where the rule has no date after `after`: then there are none.
+ */
+export function meetingDatesAfter(input: MeetingDatesInput, after: Date): Date[] {
+  const rule = parseRule(requireString(input.rrule, 'rrule', 1000));
+  const wanted = requireInteger(input.count, 'count', 1, MOST_DATES);
+  const { instants } = generate(rule, readStart(input.start), readZone(input.timeZone), wanted, after.getTime());
+  return instants.map((instant) => new Date(instant));
+}
+
 function readZone(value: unknown): string {
   const name = requireString(value, 'timeZone', 100);
   const unknown = new CalcInputError('timeZone', 'time-zone', 'timeZone must be an IANA zone, like Europe/London.');
@@ -114,7 +127,7 @@ function toInstant(wall: Temporal.PlainDateTime, timeZone: string): number {
  * The library runs on wall times as though they were UTC, because in a zone it leaves
  * out instances that fall into a gap, where a meeting should still be held.
  */
-function generate(rule: RecurrenceRule, start: Temporal.PlainDateTime, timeZone: string, wanted: number) {
+function generate(rule: RecurrenceRule, start: Temporal.PlainDateTime, timeZone: string, wanted: number, after = -Infinity) {
   const instants = new Set<number>();
   if (positionsOutOfReach(rule)) return { instants: [], ended: true };
   const until = rule.until ?? Infinity;
@@ -123,7 +136,7 @@ function generate(rule: RecurrenceRule, start: Temporal.PlainDateTime, timeZone:
   const visit = (wall: { toString(): string }): boolean => {
     const instant = toInstant(Temporal.ZonedDateTime.from(wall.toString()).toPlainDateTime(), timeZone);
     if (instant > until) return false;
-    instants.add(instant);
+    if (instant > after) instants.add(instant);
     seen += 1;
     ended ||= seen === rule.count;
     return instants.size < wanted && seen !== rule.count;
