@@ -3,10 +3,9 @@ import compression from 'compression';
 import cookieParser from 'cookie-parser';
 import helmet from 'helmet';
 import { validationPipe } from './common/problems/validation.pipe.js';
+import { jsonBody } from './common/web/json-body.js';
 import { serveWeb } from './common/web/serve-web.js';
 import { Settings } from './config/settings.js';
-
-const BODY_LIMIT = '1mb';
 
 /** Everything between the socket and the routes; the tests' application has the same. */
 export function setUp(app: NestExpressApplication): NestExpressApplication {
@@ -32,7 +31,7 @@ export function setUp(app: NestExpressApplication): NestExpressApplication {
   // an event stream must not wait in a compressor
   app.use(compression({ filter: (request, response) => !String(response.getHeader('Content-Type')).startsWith('text/event-stream') && compression.filter(request, response) }));
   app.use(cookieParser());
-  app.useBodyParser('json', { limit: BODY_LIMIT });
+  app.useBodyParser('json', jsonBody);
   app.useGlobalPipes(validationPipe());
   app.setGlobalPrefix('api');
   app.enableShutdownHooks();

@@ -4,14 +4,18 @@ import { AuthGuard } from '@nestjs/passport';
 import { mayOnSite } from '../../access/access.policy.js';
 import type { Actor } from '../../access/actor.js';
 import { ADMINISTRATOR_PERMISSIONS, ROLE_PERMISSIONS } from '../../access/role-permissions.js';
+import { JwtStrategy } from '../../auth/jwt.strategy.js';
 import { DECLARATION, type RouteDeclaration } from '../decorators/route-access.decorator.js';
 import { forbidden, Problem } from '../problems/problem.js';
 
 /** For every route: no token, no entry, unless it is public. */
 @Injectable()
-export class AccessGuard extends AuthGuard('jwt') {
-  constructor(private readonly reflector: Reflector) {
-    super();
+export class AccessGuard extends AuthGuard() {
+  constructor(
+    private readonly reflector: Reflector,
+    strategy: JwtStrategy,
+  ) {
+    super({ defaultStrategy: strategy.strategyName });
   }
 
   override async canActivate(context: ExecutionContext): Promise<boolean> {

@@ -9,6 +9,7 @@ import {
   IsInt,
   IsNotEmpty,
   IsNumber,
+  IsObject,
   IsOptional,
   IsString,
   Max,
@@ -75,13 +76,14 @@ export const OptionalList = (itemType: () => new () => object, most: number) =>
     IsOptional(),
     IsArray(),
     ArrayMaxSize(most),
+    IsObject({ each: true }),
     ValidateNested({ each: true }),
     Type(itemType),
   );
 
 export const RequiredList = (itemType: () => new () => object, most: number) =>
-  applyDecorators(ApiProperty({ type: () => itemType(), isArray: true }), IsArray(), ArrayMaxSize(most), ValidateNested({ each: true }), Type(itemType));
+  applyDecorators(ApiProperty({ type: () => itemType(), isArray: true }), IsArray(), ArrayMaxSize(most), IsObject({ each: true }), ValidateNested({ each: true }), Type(itemType));
 
 /** A nested object that may be left out. */
 export const OptionalObject = (type: () => new () => object) =>
-  applyDecorators(ApiPropertyOptional({ type: () => type() }), IsOptional(), ValidateNested(), Type(type));
+  applyDecorators(ApiPropertyOptional({ type: () => type() }), IsOptional(), IsObject(), ValidateNested(), Type(type));
