@@ -1,6 +1,7 @@
 // npm test: every check and suite, on services of its own. `-- --only <part> [path]` runs one part.
 import { join } from 'node:path';
 import { BUILDS, buildWorkspace, isBuilt } from './lib/builds.mjs';
+import { withCheckoutLock } from './lib/checkout-lock.mjs';
 import { lastLine, total } from './lib/counting.mjs';
 import { checkNodeVersion, installMissing } from './lib/install.mjs';
 import { createLifecycle } from './lib/lifecycle.mjs';
@@ -14,6 +15,8 @@ const root = projectRoot(import.meta.dirname);
 const lifecycle = createLifecycle();
 const results = [];
 lifecycle.handleSignals(1, () => process.stdout.write('\nStopping …\n'));
+
+const withLock = (work) => withCheckoutLock(root, work, { say: (line) => process.stdout.write(`${line}\n`), check: lifecycle.check });
 
 function chosenParts(args) {
   const at = args.indexOf('--only');
@@ -79,7 +82,7 @@ function couldNotRun(part, why, error) {
 async function runAll(parts, pattern, services) {
   const base = { folder: services.folder, pattern };
   await runChecks(parts.filter((part) => part.check && !part.builds), { ...base, env: withoutSettings() });
-  const broken = await buildFor(parts);
+  const broken = await withLock(() => buildFor(parts));
   let down = null;
   if (parts.some((part) => part.services)) {
     await step('Services', () => services.start()).catch((error) => {
@@ -111,7 +114,7 @@ async function runWithServices(part, base, services) {
 async function main() {
   const { parts, pattern } = chosenParts(process.argv.slice(2));
   checkNodeVersion();
-  await installMissing(root, 'test');
+  await withLock(() => installMissing(root, 'test'));
   lifecycle.check();
   const services = await createTestServices(root);
   await lifecycle.onStop(() => tidy(services));

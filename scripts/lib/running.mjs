@@ -2,24 +2,8 @@ import { existsSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { setTimeout as pause } from 'node:timers/promises';
 import { Problem } from './problem.mjs';
+import { identity, isAlive } from './process-identity.mjs';
 import { signalGroup } from './processes.mjs';
-
-/** A process is told from a later one with the same number by when it was started. */
-function startedAt(pid) {
-  try {
-    const stat = readFileSync(`/proc/${pid}/stat`, 'utf8');
-    const fields = stat.slice(stat.lastIndexOf(')') + 2).split(' ');
-    return fields[0] === 'Z' ? null : fields[19];
-  } catch {
-    return null;
-  }
-}
-
-function isAlive({ pid, started }) {
-  return started !== null && startedAt(pid) === started;
-}
-
-const identity = (pid) => ({ pid, started: startedAt(pid) });
 
 /**
  * running.json in the data folder says whose it is at the moment. Left by a start that was killed, it

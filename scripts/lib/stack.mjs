@@ -1,5 +1,6 @@
 import { apiEnvironment, createLocalServices, wantedPorts } from './app.mjs';
 import { BUILDS, buildWorkspace, isBuilt } from './builds.mjs';
+import { withCheckoutLock } from './checkout-lock.mjs';
 import { checkNodeVersion, installMissing } from './install.mjs';
 import { checkPortsFree } from './ports.mjs';
 import { createRunningFile } from './running.mjs';
@@ -24,9 +25,9 @@ export async function bringUpStack({ root, lifecycle, workspaces }) {
   if (left.length > 0) process.stdout.write(`Ended ${left.length} processes that an earlier start had left.\n`);
   await check();
 
-  await installMissing(root, settings.KERFSIDE_DB_URL ? 'run-without-database' : 'run');
-  lifecycle.check();
-  await build({ root, lifecycle, settings, workspaces });
+  const purpose = settings.KERFSIDE_DB_URL ? 'run-without-database' : 'run';
+  const say = (line) => process.stdout.write(`${line}\n`);
+  await withCheckoutLock(root, () => installAndBuild({ root, lifecycle, settings, workspaces, purpose }), { say, check: lifecycle.check });
 
   const secrets = readSecrets(settings.KERFSIDE_DATA);
   const services = createLocalServices({ settings, secrets });
@@ -37,7 +38,9 @@ export async function bringUpStack({ root, lifecycle, workspaces }) {
   return { settings, services, env: apiEnvironment({ settings, secrets, services }), startService };
 }
 
-async function build({ root, lifecycle, settings, workspaces }) {
+async function installAndBuild({ root, lifecycle, settings, workspaces, purpose }) {
+  await installMissing(root, purpose);
+  lifecycle.check();
   const needed = BUILDS.filter(
     ({ workspace }) =>
       workspaces.includes(workspace) &&
