@@ -11,9 +11,11 @@ export async function withCheckoutLock(root, work, { say = () => {}, check = () 
   const file = join(root, '.cache/install-and-build.lock');
   mkdirSync(join(root, '.cache'), { recursive: true });
   let told = false;
+  let unreadable = 0;
   while (!take(file)) {
     const holder = read(file);
-    if (holder && !isAlive(holder)) rmSync(file, { force: true });
+    unreadable = holder ? 0 : unreadable + 1;
+    if ((holder && !isAlive(holder)) || unreadable > 25) rmSync(file, { force: true });
     else {
       if (!told && holder) say(`Waiting for process ${holder.pid}, which installs or builds in this checkout.`);
       told ||= Boolean(holder);
@@ -38,7 +40,7 @@ function take(file) {
   }
 }
 
-/** Null while its holder is still writing it. */
+/** Null while its holder is still writing it (or was killed while it wrote). */
 function read(file) {
   try {
     return JSON.parse(readFileSync(file, 'utf8'));
