@@ -32,6 +32,6 @@ import { SessionsService } from './sessions.service.js';
     RefreshCookie,
     SessionsService,
   ],
-  exports: [AccessTokensService, AuthService, InvitationsService, OneTimeTokensService, PasswordHasher, PasswordsService, SessionsService],
+  exports: [AccessTokensService, AuthService, InvitationsService, JwtStrategy, OneTimeTokensService, PasswordHasher, PasswordsService, SessionsService],
 })
 export class AuthModule {}

@@ -1,6 +1,8 @@
 import { Injectable } from '@nestjs/common';
 import { PassportStrategy } from '@nestjs/passport';
 import type { Request } from 'express';
+import { randomUUID } from 'node:crypto';
+import passport from 'passport';
 import { ExtractJwt, Strategy } from 'passport-jwt';
 import { DataSource } from 'typeorm';
 import type { Actor } from '../access/actor.js';
@@ -12,6 +14,9 @@ import { Session } from './entities/session.entity.js';
 /** Turns an access token into the actor; roles are read at each request, so that a removal counts at once. */
 @Injectable()
 export class JwtStrategy extends PassportStrategy(Strategy) {
+  /** Passport is one for the process: a second application in it must not answer for this one. */
+  readonly strategyName = `jwt-${randomUUID()}`;
+
   constructor(
     settings: Settings,
     private readonly dataSource: DataSource,
@@ -25,6 +30,7 @@ export class JwtStrategy extends PassportStrategy(Strategy) {
       ignoreExpiration: false,
       passReqToCallback: true,
     });
+    passport.use(this.strategyName, this);
   }
 
   async validate(request: Request, claims: Record<string, unknown>): Promise<Actor | false> {

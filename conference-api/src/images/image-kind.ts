@@ -1,4 +1,4 @@
-import { fileTypeFromBuffer } from 'file-type';
+import { fileTypeFromBuffer } from 'file-type/node';
 import { Problem } from '../common/problems/problem.js';
 import type { CaseImage } from './entities/case-image.entity.js';
 
