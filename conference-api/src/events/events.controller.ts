@@ -15,7 +15,7 @@ export class EventsController {
   @Get()
   @SignedIn()
   @ApiProduces('text/event-stream')
-  open(@CurrentActor() actor: Actor, @Headers('last-event-id') lastEventId: string | undefined, @Req() request: Request, @Res() response: Response): void {
-    this.streams.open(actor, lastEventId, request, response);
+  open(@CurrentActor() actor: Actor, @Headers('last-event-id') lastEventId: string | undefined, @Req() request: Request, @Res() response: Response): Promise<void> {
+    return this.streams.open(actor, lastEventId, request, response);
   }
 }

@@ -1,4 +1,4 @@
-import { type BeforeApplicationShutdown, Injectable, Logger } from '@nestjs/common';
+import { type BeforeApplicationShutdown, Injectable, Logger, type OnModuleDestroy } from '@nestjs/common';
 import { setTimeout as pause } from 'node:timers/promises';
 import { Settings } from '../config/settings.js';
 import { asDeliveryFault, DeliveryFault } from './delivery-fault.js';
@@ -36,7 +36,7 @@ export interface SendingResult {
  * - Two who hold a mail, because one was slow: the mark asks for the own claim, so only one comes to the dot.
  */
 @Injectable()
-export class OutboxSender implements BeforeApplicationShutdown {
+export class OutboxSender implements OnModuleDestroy, BeforeApplicationShutdown {
   private readonly logger = new Logger(OutboxSender.name);
   private running: Promise<SendingResult> | null = null;
   private isStopping = false;
@@ -55,9 +55,12 @@ export class OutboxSender implements BeforeApplicationShutdown {
     return this.running;
   }
 
+  onModuleDestroy(): void {
+    this.isStopping = true;
+  }
+
   /** Lets the mail under way be finished; the others are given back. */
   async beforeApplicationShutdown(): Promise<void> {
-    this.isStopping = true;
     await this.running?.catch(() => undefined);
   }
 
