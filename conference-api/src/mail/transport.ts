@@ -6,6 +6,7 @@ import { asDeliveryFault, DeliveryFault } from './delivery-fault.js';
 import type { WholeMessage } from './message.js';
 
 const CONNECT_MS = 5000;
+const GOODBYE_MS = 2000;
 const SILENCE_MS = 20_000;
 /** One mail takes no longer than this, so that a lease outlives it. */
 export const LONGEST_SEND_MS = 40_000;
@@ -87,6 +88,8 @@ export class SmtpSession {
   /** Says goodbye; for a session with nothing under way. */
   end(): void {
     this.connection.quit();
+    // a server that does not say goodbye in return must not keep the process
+    setTimeout(() => this.connection.close(), GOODBYE_MS).unref();
   }
 
   close(): void {

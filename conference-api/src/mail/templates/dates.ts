@@ -17,7 +17,7 @@ function partsIn(instant: Date, timeZone: string): Record<string, string> {
 /** `9 Dec 2026`, by the zone's calendar. */
 export function dayIn(instant: Date, timeZone: string): string {
   const { day, month, year } = partsIn(instant, timeZone);
-  return `${day} ${MONTHS[Number(month) - 1]} ${year}`;
+  return `${Number(day)} ${MONTHS[Number(month) - 1]} ${year}`;
 }
 
 /** `Wednesday 9 Dec 2026, 07:30 (Europe/London)`. */
