@@ -21,11 +21,17 @@ export function Component() {
   const { id = '' } = useParams();
   const query = useQuery(meetingQuery(id));
   return (
-    <Loaded query={query} what="meeting" skeleton={<Page title="Meeting" heading="Meeting" children={<TextSkeleton lines={8} />} />}>
+    <Loaded query={query} what="meeting" skeleton={<Waiting />}>
       {(meeting) => <MeetingPage key={meeting.id} meeting={meeting} />}
     </Loaded>
   );
 }
+
+const Waiting = () => (
+  <Page title="Meeting" heading="Meeting">
+    <TextSkeleton lines={8} />
+  </Page>
+);
 
 function MeetingPage({ meeting }: { meeting: Meeting }) {
   const { actions, state } = meeting;
@@ -60,7 +66,7 @@ function EditableAgenda({ meeting }: { meeting: Meeting }) {
       </Section>
       <div className="print-hidden">
         <ListableCases meeting={meeting} draft={draft} />
-        {meeting.actions.sendAgenda && <SendAgenda meeting={meeting} isDirty={draft.isDirty} />}
+        <SendAgenda meeting={meeting} isDirty={draft.isDirty} />
       </div>
     </>
   );

@@ -17,8 +17,8 @@ export function MoveMeeting({ meeting }: { meeting: Meeting }) {
       title="Move meeting"
       description={
         meeting.agendaSentAt
-          ? 'The agenda was sent already: send it again afterwards, so that members’ calendars follow.'
-          : 'Members learn of the new time with the agenda.'
+          ? 'The agenda was sent already: every member gets the new time by e-mail at once, for their calendars too.'
+          : 'Nobody has had the agenda yet: members learn of the new time with it.'
       }
       trigger={<Button variant="soft">Move meeting</Button>}
     >

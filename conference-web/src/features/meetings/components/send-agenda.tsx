@@ -12,29 +12,29 @@ import { useSendAgenda } from '../api/send-agenda';
 /** When the agenda goes out, and the button that sends it now. */
 export function SendAgenda({ meeting, isDirty }: { meeting: Meeting; isDirty: boolean }) {
   const { agendaSentAt, agendaDueAt, conferenceName, conferenceId, items } = meeting;
+  const isUnchanged = agendaSentAt !== null && !meeting.actions.sendAgenda && !isDirty;
   const members = useQuery(membersQuery(conferenceId)).data?.items.length;
   const { mutateAsync } = useSendAgenda(meeting.id);
   const [result, setResult] = useState('');
   const send = async () => {
     const { mails } = await mutateAsync(meeting.version);
-    setResult(mails === 0 ? 'Nothing has changed since it was last sent, so nothing was sent.' : `${counted(mails, 'mail')} on the way.`);
+    setResult(`${counted(mails, 'mail')} on the way.`);
   };
   return (
     <Section title="Sending the agenda">
       <p style={{ maxWidth: 'var(--measure)', lineHeight: 1.5 }}>
         {agendaSentAt
-          ? `Sent ${formatDateTime(agendaSentAt)}. Changes made since reach members only when it is sent again.`
+          ? `Sent ${formatDateTime(agendaSentAt)}. ${isUnchanged ? 'Nothing has changed since.' : 'What was changed since reaches members only when it is sent again.'}`
           : `The server sends it by itself on ${formatDateTime(agendaDueAt)}, as it stands then.`}
       </p>
       <Confirm
         title="Send agenda"
         confirmWord="Send agenda"
         onConfirm={send}
-        trigger={<Button disabled={isDirty}>{agendaSentAt ? 'Send agenda again' : 'Send agenda'}</Button>}
+        trigger={<Button disabled={isDirty || isUnchanged}>{agendaSentAt ? 'Send agenda again' : 'Send agenda'}</Button>}
       >
         {`The agenda with ${counted(items.length, 'case')} goes by e-mail to ${members === undefined ? 'all members' : `the ${counted(members, 'member')}`} of ${conferenceName}, with an entry for their calendars. `}
         {'It holds case codes, minutes, presenters and a link; no clinical detail.'}
-        {agendaSentAt ? ' An agenda that has not changed is not sent twice.' : ''}
       </Confirm>
       {isDirty && <p className="label-text">Save the agenda first.</p>}
       <p role="status">{result}</p>
