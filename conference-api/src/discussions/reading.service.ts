@@ -3,6 +3,7 @@ import { DataSource } from 'typeorm';
 import { AccessService } from '../access/access.service.js';
 import type { Actor } from '../access/actor.js';
 import { Permission } from '../access/permission.js';
+import { Case } from '../cases/entities/case.entity.js';
 import { visibleCases } from '../cases/visible-cases.js';
 import type { UnreadListDto } from './dto/discussion.dto.js';
 import { CaseReading } from './entities/case-reading.entity.js';
@@ -37,7 +38,7 @@ export class ReadingService {
   async unread(actor: Actor): Promise<UnreadListDto> {
     const visible = visibleCases(actor, 'c');
     const rows = await this.unreadQuery(actor.personId)
-      .innerJoin('r.case', 'c')
+      .innerJoin(Case, 'c', 'c.id = r.caseId')
       .andWhere(visible.sql, visible.parameters)
       .getRawMany<CountRow>();
     const items = rows.map((row) => ({ caseId: row.caseId, count: Number(row.count) }));

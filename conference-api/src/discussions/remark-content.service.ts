@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { type EntityManager, In } from 'typeorm';
-import { screenIdentifiers } from '../calc/identifiers/identifier-screen.js';
+import { type FindingKind, screenIdentifiers } from '../calc/identifiers/identifier-screen.js';
 import { readRichText } from '../calc/rich-text/rich-text.js';
 import { mentionedIds, richTextPlain, withMentionNames } from '../calc/rich-text/rich-text-words.js';
 import type { RichText } from '../calc/vocabulary/discussions.js';
@@ -40,8 +40,11 @@ export class RemarkContentService {
   }
 }
 
+// an address on the web is named to point at a paper, not at a patient
+const NO_PATIENTS: readonly FindingKind[] = ['url', 'ip-address'];
+
 function refuseIdentifiers(text: string): void {
-  const certain = screenIdentifiers({ text }).findings.filter(({ strength }) => strength === 'certain');
+  const certain = screenIdentifiers({ text }).findings.filter(({ kind, strength }) => strength === 'certain' && !NO_PATIENTS.includes(kind));
   if (!certain.length) return;
   const errors = certain.map((finding) => ({
     field: 'content',
