@@ -22,7 +22,8 @@ function parts(at: string | Date, timeZone: string): Record<string, string> {
 /** `7 Dec 2026`. The months are our own: Intl's English ones differ between browsers ('Sept'). */
 export function formatDate(at: string | Date, timeZone = localZone()): string {
   const { day, month, year } = parts(at, timeZone);
-  return `${day} ${MONTHS[Number(month) - 1]} ${year}`;
+  // beside a two-digit hour some versions of Intl pad the day too
+  return `${Number(day)} ${MONTHS[Number(month) - 1]} ${year}`;
 }
 
 /** `Mon 7 Dec 2026`. */

@@ -26,7 +26,6 @@ export function useListKeys(list: RefObject<HTMLElement | null>): void {
     const here = items.indexOf(document.activeElement as HTMLElement);
     const next = here < 0 ? (by > 0 ? 0 : items.length - 1) : Math.min(Math.max(here + by, 0), items.length - 1);
     items[next]?.focus();
-    items[next]?.scrollIntoView({ block: 'nearest' });
   };
   useKey('j', 'Next in the list', () => move(1));
   useKey('k', 'Previous in the list', () => move(-1));
