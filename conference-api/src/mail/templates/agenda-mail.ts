@@ -16,7 +16,7 @@ export interface AgendaData {
   cancelled?: boolean;
 }
 
-const COLUMNS = [{ title: 'No.', numeric: true }, { title: 'Case' }, { title: 'Presenter' }, { title: 'Minutes', numeric: true }];
+const COLUMNS = [{ title: 'No.', numeric: true }, { title: 'Case', isCode: true }, { title: 'Presenter' }, { title: 'Min', numeric: true }];
 
 export const agenda: Template<AgendaData> = {
   needs: ['conference', 'meetingId', 'sequence', 'startsAt', 'minutes', 'timeZone', 'items', 'url'],

@@ -35,7 +35,7 @@ body { margin: 0; padding: 0; background: ${GROUND}; -webkit-text-size-adjust: 1
 </head>
 <body>
 <table role="presentation" width="100%" cellspacing="0" cellpadding="0" border="0" style="background:${GROUND}"><tr><td align="center" style="padding:16px 8px">
-<table role="presentation" width="100%" cellspacing="0" cellpadding="0" border="0" style="max-width:600px;background:${PAPER};border:1px solid ${LINE}"><tr><td class="sheet" style="padding:28px 32px;font-family:${SERIF};font-size:16px;line-height:1.6;color:${INK};overflow-wrap:anywhere">
+<table role="presentation" width="100%" cellspacing="0" cellpadding="0" border="0" style="max-width:600px;background:${PAPER};border:1px solid ${LINE}"><tr><td class="sheet" style="padding:28px 32px;font-family:${SERIF};font-size:16px;line-height:1.6;color:${INK};overflow-wrap:break-word">
 <p style="margin:0 0 20px;font-family:${SANS};font-size:14px;letter-spacing:.04em;color:${ACCENT}">Kerfside</p>
 ${blocks.map(blockAsHtml).join('\n')}
 <p style="margin:28px 0 0;padding-top:12px;border-top:1px solid ${LINE};font-family:${SANS};font-size:13px;line-height:1.5;color:${QUIET}">${escapeHtml(footer)}</p>
@@ -70,11 +70,12 @@ function linkAsHtml(label: string, url: string): string {
 
 function tableAsHtml({ columns, rows }: Extract<Block, { kind: 'table' }>): string {
   const align = (index: number) => (columns[index]?.numeric ? 'right' : 'left');
+  const wrapping = (index: number) => (columns[index]?.numeric || columns[index]?.isCode ? 'white-space:nowrap;' : 'overflow-wrap:anywhere;');
   const head = columns
-    .map(({ title }, index) => `<th scope="col" class="cell" align="${align(index)}" style="padding:6px 16px 6px 0;border-bottom:1px solid ${INK};font-size:14px;font-weight:600">${escapeHtml(title)}</th>`)
+    .map(({ title }, index) => `<th scope="col" class="cell" align="${align(index)}" style="padding:6px 16px 6px 0;white-space:nowrap;border-bottom:1px solid ${INK};font-size:14px;font-weight:600">${escapeHtml(title)}</th>`)
     .join('');
   const body = rows
-    .map((cells) => `<tr>${cells.map((cell, index) => `<td class="cell" align="${align(index)}" valign="top" style="padding:8px 16px 8px 0;border-bottom:1px solid ${LINE};font-variant-numeric:tabular-nums">${escapeHtml(cell)}</td>`).join('')}</tr>`)
+    .map((cells) => `<tr>${cells.map((cell, index) => `<td class="cell" align="${align(index)}" valign="top" style="padding:8px 16px 8px 0;${wrapping(index)}border-bottom:1px solid ${LINE};font-variant-numeric:tabular-nums">${escapeHtml(cell)}</td>`).join('')}</tr>`)
     .join('\n');
   return `<table width="100%" cellspacing="0" cellpadding="0" border="0" style="margin:0 0 16px;border-collapse:collapse;font-family:${SANS};font-size:16px;line-height:1.4">
 <thead><tr>${head}</tr></thead>

@@ -10,6 +10,8 @@ export interface Column {
   title: string;
   /** Numbers stand to the right. */
   numeric?: boolean;
+  /** Never broken into two lines: a case's code. */
+  isCode?: boolean;
 }
 
 export const heading = (text: string): Block => ({ kind: 'heading', text });
