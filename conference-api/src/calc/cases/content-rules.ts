@@ -1,8 +1,5 @@
 import type { CaseContent, ContentSection, Patient } from '../vocabulary/case-content.js';
-import { FIELD_WORDS, type FieldWords } from './field-words.js';
-
-/** Age groups end here: 90 stands for 90 and over. */
-export const OLDEST_AGE_YEARS = 90;
+import { FIELD_WORDS, type FieldWords, OLDEST_AGE_YEARS } from './field-words.js';
 
 /** A section as it is kept: ages of 90 and over as one group, absent fields left out. */
 export function keptSection<S extends ContentSection>(section: S, value: CaseContent[S]): CaseContent[S] {

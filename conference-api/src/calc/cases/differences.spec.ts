@@ -24,6 +24,10 @@ describe('differences', () => {
     ]);
   });
 
+  it('name the oldest as one group', () => {
+    expect(told({ patient: { ageYears: 89 } }, { patient: { ageYears: 90 } })).toEqual([['ageYears', 'Age', '89 years', '90 years and over']]);
+  });
+
   it('tell items apart by id, nested ones too', () => {
     const shell = { id: 'a', part: 'shell' as const, outerDiameterMm: 54, screws: [{ id: 's', hour: 11 }] };
     const liner = { id: 'b', part: 'liner' as const };

@@ -3,10 +3,10 @@ import { JOINT_WORDS, SIDE_WORDS, URGENCY_WORDS } from '../vocabulary/case.js';
 import type { ContentSection, Words } from '../vocabulary/case-content.js';
 import * as words from '../vocabulary/case-content.js';
 
-/** A field as people name it; `kind` says how its value is put in words. */
+/** A field as people name it; `kind` says how its value is put in words. From `openFrom` on, a number stands for itself and over. */
 export type FieldWords =
   | { kind: 'text' | 'flag' | 'id'; label: string }
-  | { kind: 'number'; label: string; unit?: string }
+  | { kind: 'number'; label: string; unit?: string; openFrom?: number }
   | { kind: 'one' | 'many'; label: string; words: Words }
   | { kind: 'list'; label: string; item: ItemWords };
 
@@ -17,6 +17,9 @@ export interface ItemWords {
   name: (item: Record<string, unknown>) => string;
   fields: Record<string, FieldWords>;
 }
+
+/** Age groups end here: 90 stands for 90 and over. Source: 45 CFR 164.514(b)(2)(i)(C). */
+export const OLDEST_AGE_YEARS = 90;
 
 const text = (label: string): FieldWords => ({ kind: 'text', label });
 const flag = (label: string): FieldWords => ({ kind: 'flag', label });
@@ -129,7 +132,7 @@ export const FIELD_WORDS: Record<ContentSection, Record<string, FieldWords>> = {
     urgencyReason: text('Reason for the urgency'),
   },
   patient: {
-    ageYears: number('Age', 'years'),
+    ageYears: { kind: 'number', label: 'Age', unit: 'years', openFrom: OLDEST_AGE_YEARS },
     sex: one('Sex', words.SEX),
     bmiBand: one('BMI', words.BMI_BAND),
     asa: one('ASA class', words.ASA),
@@ -201,12 +204,19 @@ export const FIELD_WORDS: Record<ContentSection, Record<string, FieldWords>> = {
 export const saysNothing = (value: unknown): boolean =>
   value === undefined || value === null || (typeof value === 'string' && value.trim() === '') || (Array.isArray(value) && value.length === 0);
 
+const UNITS_WITHOUT_SPACE = ['°', '/µL'];
+
+function numberInWords({ unit, openFrom }: { unit?: string; openFrom?: number }, value: number): string {
+  const measured = unit ? `${value}${UNITS_WITHOUT_SPACE.includes(unit) ? '' : ' '}${unit}` : String(value);
+  return openFrom !== undefined && value >= openFrom ? `${measured} and over` : measured;
+}
+
 /** A value in words; null where it says nothing. Lists of items are worded by their names. */
 export function valueInWords(field: FieldWords, value: unknown): string | null {
   if (saysNothing(value)) return null;
   switch (field.kind) {
     case 'number':
-      return field.unit ? `${String(value)}${field.unit === '°' || field.unit === '/µL' ? '' : ' '}${field.unit}` : String(value);
+      return numberInWords(field, Number(value));
     case 'flag':
       return value === true ? 'Yes' : 'No';
     case 'one':
