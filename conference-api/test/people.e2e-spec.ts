@@ -125,7 +125,7 @@ describe('people', () => {
     it('pages through everybody once, in the order of names', async () => {
       const seen: { id: string; name: string }[] = [];
       for (let cursor: string | null = ''; cursor !== null; ) {
-        const { body } = await list(`limit=3${cursor ? `&cursor=${cursor}` : ''}`).expect(200);
+        const { body }: { body: { items: typeof seen; nextCursor: string | null } } = await list(`limit=3${cursor ? `&cursor=${cursor}` : ''}`).expect(200);
         expect(body.items.length).toBeLessThanOrEqual(3);
         seen.push(...body.items);
         cursor = body.nextCursor;
