@@ -1,0 +1,82 @@
+import { type DemoCase, kit, options, parts, rim, screws, shellKit, shellSteps, steps, USUAL_ORDER } from '../demo-case.js';
+
+/** Infected, or perhaps infected. All of it is invented. */
+export const INFECTION_CASES: DemoCase[] = [
+  {
+    key: 'infected-fixed-shell',
+    presenter: 'surgeon',
+    until: 'listed',
+    meetingWeek: 0,
+    minutes: 20,
+    images: ['infected-fixed-shell'],
+    content: {
+      heading: { title: 'Chronic infection, well-fixed shell with three screws', side: 'left', joint: 'hip', question: 'One stage or two, and how do we get a 58 mm shell out without losing the medial wall?', urgency: 'soon', urgencyReason: 'Draining for six weeks, no sepsis.' },
+      patient: { ageYears: 71, sex: 'male', bmiBand: '30-34.9', asa: 'III', comorbidities: ['diabetes-with-end-organ-damage', 'peripheral-vascular-disease'], metalAllergy: 'None known', cementAllergy: 'None known', antibioticAllergy: 'None known', anticoagulation: 'antiplatelet', function: 'Wheelchair outdoors, frame indoors.' },
+      history: { indexDiagnosis: 'Osteoarthritis', indexInterval: '3 years', operations: [{ id: 'op-1', interval: '3 years ago', procedure: 'Uncemented total hip replacement' }, { id: 'op-2', interval: '18 months ago', procedure: 'Debridement with exchange of head and liner' }], reasons: ['infection'], course: 'Wound broke down 18 months ago; debridement with exchange of modular parts. Sinus since six weeks.' },
+      implants: { parts: parts(
+        { part: 'shell', fixation: 'well-fixed', material: 'titanium', maker: 'unknown', certainty: 'certain', knownFrom: 'operation-note', outerDiameterMm: 58, innerDiameterMm: 50, thicknessClass: 'standard', shape: 'hemispherical', screwHoles: true, screws: screws({ hour: 12, quadrant: 'posterosuperior', lengthMm: 35, headDrive: 'hex-3.5', tipInsidePelvis: false }, { hour: 11, quadrant: 'posterosuperior', lengthMm: 30, headDrive: 'hex-3.5', tipInsidePelvis: false }, { hour: 1, quadrant: 'anterosuperior', lengthMm: 25, headDrive: 'hex-3.5', tipInsidePelvis: null }) },
+        { part: 'liner', fixation: 'well-fixed', material: 'cross-linked-polyethylene', maker: 'unknown', linerKind: 'standard', thicknessMm: 7, innerDiameterMm: 36, certainty: 'certain', knownFrom: 'operation-note' },
+        { part: 'head', fixation: 'well-fixed', material: 'cobalt-chrome', maker: 'unknown', sizeMm: 36, certainty: 'certain', knownFrom: 'operation-note' },
+        { part: 'stem', fixation: 'well-fixed', material: 'titanium', maker: 'unknown', certainty: 'certain', knownFrom: 'operation-note' },
+      ) },
+      infection: { suspicion: 'confirmed', timing: 'chronic', sampling: 'Three and two weeks ago', sinusTract: true, sameOrganismCultures: 2, crpMgL: 42, esrMmH: 71, synovialWbcPerUl: 18400, pmnPercent: 91, leukocyteEsterase: '++', alphaDefensin: null, cultures: [{ id: 'culture-1', specimen: 'Aspirate', result: 'Growth', organism: 'Staphylococcus epidermidis', sensitivities: 'Sensitive to rifampicin, vancomycin, doxycycline; resistant to oxacillin' }, { id: 'culture-2', specimen: 'Second aspirate', result: 'Growth', organism: 'Staphylococcus epidermidis', sensitivities: 'Same pattern' }], histology: '' },
+      bone: { direction: 'none', migrationMm: 0, ischialLysis: 'mild', teardrop: 'intact', kohler: 'intact', superiorRim: 'intact', transverseLine: false, readersClass: 'IIA', inclinationDeg: 41, versionDeg: 16, hipCentreHeightMm: 18, note: 'Cavities in the greater trochanter; lysis behind the anterior screw.' },
+      plan: { steps: [...shellSteps('Spacer with antibiotic cement; second stage after six weeks without antibiotics'), ...steps(['stem', 'Stem out through an extended trochanteric osteotomy of 13 cm', 'Oscillating saw, flexible osteotomes', 'Longer osteotomy', 'Five samples before any antibiotic'])].map((step, index) => ({ ...step, id: `step-${index + 1}` })), rim: rim(USUAL_ORDER, [5, 6, 7, 8]), kit: [...shellKit(58, 36), ...kit({ item: 'Cement with gentamicin and vancomycin, four mixes', stepId: 'step-7', source: 'hospital', confirmed: true })].map((item, index) => ({ ...item, id: `kit-${index + 1}` })), reconstruction: 'Hand-made spacer; second stage with a porous shell of 62 to 64 mm.', expectedNextShellMm: 62, expectedBoneLoss: 'Medial wall is the worry.' },
+      options: options(['Two stages, shell out with curved blades', 'Spacer, antibiotics, second stage.', true], ['One stage', 'Organism known; soft tissue poor.'], ['Suppression with antibiotics', 'Sinus will stay.'], ['Shell out, no reconstruction', 'Last resort.']),
+    },
+    talk: [
+      { by: 'microbiology', text: 'Both aspirates grew the same organism with the same pattern. Vancomycin and rifampicin are open to us; start rifampicin only when the wound is dry.', anchor: ['section', 'infection'] },
+      { by: 'plastics', text: 'The sinus lies in the scar. A fasciocutaneous advance would close it; tell us the date and we will be in the room.' },
+      { by: 'vascular', text: 'The screw at one o’clock is anterosuperior. I would want a CT with contrast before anybody turns it.', anchor: ['step', 'step-3'], kind: 'question' },
+      { by: 'pharmacy', text: 'Renal function decides the vancomycin. eGFR?', anchor: ['section', 'patient'], kind: 'question', replies: [{ by: 'surgeon', text: '48, stable for a year.', answers: true }] },
+    ],
+    first: { surgeon: [8, 4, 2, 3], panellist: [8, 5, 2, 2], panellist2: [7, 6, 2, 2], microbiology: [9, 3, 3, 3], microbiology2: [8, 5, 3, 2], plastics: [8, 3, 2, 3], anaesthesia: [7, 6, 4, 4], pharmacy: [7, 4, 3, 3], radiology: [8, 4, 2, 3] },
+  },
+  {
+    key: 'constrained-liner',
+    presenter: 'surgeon2',
+    until: 'checking',
+    images: ['constrained-liner'],
+    content: {
+      heading: { title: 'Constrained liner pulled out of a fixed shell', side: 'right', joint: 'hip', question: 'How do we take a constrained liner with a locking ring out, and does the shell have to follow?', urgency: 'urgent', urgencyReason: 'Dislocated, can’t be reduced closed.' },
+      patient: { ageYears: 79, sex: 'female', bmiBand: '18.5-24.9', asa: 'III', comorbidities: ['dementia'], metalAllergy: 'None known', cementAllergy: 'None known', antibioticAllergy: 'None known', anticoagulation: 'none', function: 'Care home, walked with a frame.' },
+      history: { indexDiagnosis: 'Fracture of the femoral neck', indexInterval: '6 years', operations: [{ id: 'op-1', interval: '6 years ago', procedure: 'Total hip replacement' }, { id: 'op-2', interval: '2 years ago', procedure: 'Shell exchange with a constrained liner for dislocation' }], reasons: ['instability'], course: 'Fell from a chair four days ago.' },
+      implants: { parts: parts(
+        { part: 'shell', fixation: 'well-fixed', material: 'titanium', maker: 'unknown', certainty: 'likely', knownFrom: 'operation-note', outerDiameterMm: 60, innerDiameterMm: 52, thicknessClass: 'standard', shape: 'hemispherical', screwHoles: true, screws: screws({ hour: 12, lengthMm: 30, headDrive: 'unknown', quadrant: 'posterosuperior' }, { hour: 2, lengthMm: 25, headDrive: 'unknown', quadrant: 'anterosuperior' }) },
+        { part: 'liner', fixation: 'loose', material: 'polyethylene', maker: 'unknown', linerKind: 'constrained', innerDiameterMm: 32, certainty: 'likely', knownFrom: 'operation-note' },
+        { part: 'head', fixation: 'unknown', material: 'cobalt-chrome', maker: 'unknown', sizeMm: 32, certainty: 'likely', knownFrom: 'radiograph-only' },
+      ) },
+      infection: { suspicion: 'none', timing: 'chronic', sinusTract: false, crpMgL: 31, esrMmH: 44 },
+      bone: { direction: 'none', migrationMm: 0, ischialLysis: 'mild', teardrop: 'intact', kohler: 'intact', superiorRim: 'intact', readersClass: 'IIA', inclinationDeg: 48, versionDeg: 7, hipCentreHeightMm: 24 },
+      plan: { steps: shellSteps('Dual mobility cemented into the shell if it can stay'), rim: rim(USUAL_ORDER, [5, 6, 7]), kit: shellKit(60, 32), reconstruction: 'Dual mobility, cemented into the shell or in a new one.', expectedNextShellMm: 64, expectedBoneLoss: 'None if the shell stays.' },
+      options: options(['Keep the shell, cement a dual mobility liner', 'Locking mechanism damaged; shell well placed.', true], ['Exchange the shell', 'Longer operation in a frail patient.'], ['Excision', 'If nothing holds.']),
+    },
+  },
+  {
+    key: 'jumbo-shell',
+    presenter: 'surgeon',
+    until: 'reported',
+    meetingWeek: -5,
+    minutes: 20,
+    images: ['jumbo-shell'],
+    content: {
+      heading: { title: 'Infected jumbo shell of 70 mm', side: 'left', joint: 'hip', question: 'What is left to put a shell into once 70 mm come out?', urgency: 'soon', urgencyReason: 'Pain at night, CRP rising.' },
+      patient: { ageYears: 66, sex: 'male', bmiBand: '25-29.9', asa: 'III', comorbidities: ['chronic-pulmonary-disease'], metalAllergy: 'None known', cementAllergy: 'None known', antibioticAllergy: 'None known', anticoagulation: 'none', function: 'Two crutches.' },
+      history: { indexDiagnosis: 'Osteoarthritis', indexInterval: '19 years', operations: [{ id: 'op-1', interval: '19 years ago', procedure: 'Total hip replacement' }, { id: 'op-2', interval: '6 years ago', procedure: 'Revision to a 70 mm shell with three screws' }], reasons: ['infection'], course: 'Pain at night for three months.' },
+      implants: { parts: parts(
+        { part: 'shell', fixation: 'well-fixed', material: 'tantalum', maker: 'unknown', certainty: 'certain', knownFrom: 'operation-note', outerDiameterMm: 70, innerDiameterMm: 60, thicknessClass: 'thick', shape: 'hemispherical', screwHoles: true, screws: screws({ hour: 12, lengthMm: 45, headDrive: 'hex-3.5', quadrant: 'posterosuperior' }, { hour: 11, lengthMm: 40, headDrive: 'hex-3.5', quadrant: 'posterosuperior' }, { hour: 10, lengthMm: 30, headDrive: 'hex-3.5', quadrant: 'posterosuperior' }) },
+        { part: 'liner', fixation: 'well-fixed', material: 'cross-linked-polyethylene', maker: 'unknown', linerKind: 'standard', thicknessMm: 10, innerDiameterMm: 36, certainty: 'certain', knownFrom: 'operation-note' },
+      ) },
+      infection: { suspicion: 'confirmed', timing: 'chronic', sampling: 'Two weeks before posting', sinusTract: false, sameOrganismCultures: 2, crpMgL: 38, esrMmH: 52, synovialWbcPerUl: 9600, pmnPercent: 86, cultures: [{ id: 'culture-1', specimen: 'Two aspirates', result: 'Growth', organism: 'Cutibacterium acnes', sensitivities: 'Sensitive to penicillin and rifampicin' }] },
+      bone: { direction: 'superior', migrationMm: 12, ischialLysis: 'mild', teardrop: 'intact', kohler: 'intact', superiorRim: 'deficient', transverseLine: false, readersClass: 'IIB', inclinationDeg: 45, versionDeg: 19, hipCentreHeightMm: 29 },
+      plan: { steps: shellSteps('Two stages; second stage with a 74 mm shell or an augment'), rim: rim(USUAL_ORDER, [5, 6, 7, 8]), kit: shellKit(70, 36), reconstruction: 'Second stage: 74 mm or augment.', expectedNextShellMm: 74, expectedBoneLoss: 'Porous tantalum holds everywhere; expect the posterior wall to be thin.' },
+      options: options(['Two stages with curved blades', '', true], ['One stage', ''], ['Suppression', '']),
+    },
+    talk: [{ by: 'panellist', text: 'Porous tantalum dulls blades. Have twice the number in the room.', anchor: ['step', 'step-4'] }],
+    first: { panellist: [8, 4, 2], panellist2: [8, 5, 2], chair: [8, 4, 2], microbiology: [8, 6, 2], surgeon2: [8, 5, 3], radiology: [7, 5, 3] },
+    second: { panellist: [9, 3, 2], panellist2: [8, 4, 2], chair: [9, 3, 2], microbiology: [8, 5, 2], surgeon2: [8, 4, 2], radiology: [8, 4, 2] },
+    decision: { option: 'option-1', text: 'Two stages. Twice the usual number of curved blades, since the porous surface dulls them. Posterior wall under direct sight.', conditions: 'Penicillin and rifampicin as microbiology advises.', timing: 'Within three weeks' },
+    final: { kind: 'as-agreed', informed: true },
+    outcome: { missingKit: 'Second full-radius blade of 70 mm came late from the loan kit.', minutes: 205, bloodLoss: '1000-1999', complications: ['none'], defectFound: 'IIB', removedShellMm: 70, implantedShellMm: null, boneLostHours: [6, 7], cultures: 'Same organism in four of five samples.', lesson: 'Blades for porous tantalum: count on two of each length.' },
+  },
+];
