@@ -1,5 +1,1 @@
-import { Page } from '@/components/page';
-
-export function Component() {
-  return <Page title="Image" heading="Image" />;
-}
+export { ImageRoom as Component } from '@/features/images/room/image-room';

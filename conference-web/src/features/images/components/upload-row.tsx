@@ -1,27 +1,11 @@
 import { Button } from '@radix-ui/themes';
-import { useEffect, useState } from 'react';
 import { fileSize } from '@/lib/units';
 import type { Upload, UploadQueue, UploadState } from '../upload/upload-queue';
 import { ImageFieldsForm } from './image-fields';
 import styles from './images.module.css';
 
-const SHOWN_BY_BROWSERS = ['image/jpeg', 'image/png', 'image/webp'];
-
-/** The picture as it would be sent, so that names burned into it are seen before. */
-function usePreview(file: File): string | null {
-  const [address, setAddress] = useState<string | null>(null);
-  useEffect(() => {
-    if (!SHOWN_BY_BROWSERS.includes(file.type)) return;
-    const made = URL.createObjectURL(file);
-    setAddress(made);
-    return () => URL.revokeObjectURL(made);
-  }, [file]);
-  return address;
-}
-
 export function UploadRow({ upload, queue }: { upload: Upload; queue: UploadQueue }) {
-  const { id, file, fields, state } = upload;
-  const preview = usePreview(file);
+  const { id, file, preview, fields, state } = upload;
   const errors = state.kind === 'refused' ? state.problem.byField : {};
   const isLocked = !['chosen', 'refused', 'cancelled'].includes(state.kind);
   return (

@@ -22,6 +22,8 @@ export type UploadState =
 export interface Upload {
   id: string;
   file: File;
+  /** The picture as it would be sent, where browsers can show it: names burned into it are seen before. */
+  preview: string | null;
   fields: ImageFields;
   state: UploadState;
 }
@@ -33,6 +35,8 @@ export type SendImage = (
 ) => Promise<Schemas['ImageDto']>;
 
 export const AT_ONCE = 3;
+
+const SHOWN_BY_BROWSERS = ['image/jpeg', 'image/png', 'image/webp'];
 
 const isUnderWay = ({ state }: Upload) => state.kind === 'sending' || state.kind === 'reading';
 const isWaiting = ({ state }: Upload) => state.kind === 'waiting';
@@ -57,7 +61,15 @@ export class UploadQueue {
   readonly getSnapshot = (): readonly Upload[] => this.uploads;
 
   add(files: Iterable<File>): void {
-    const added = [...files].map((file): Upload => ({ id: `upload-${this.nextId++}`, file, fields: { projection: 'other', interval: '', caption: '' }, state: { kind: 'chosen' } }));
+    const added = [...files].map(
+      (file): Upload => ({
+        id: `upload-${this.nextId++}`,
+        file,
+        preview: SHOWN_BY_BROWSERS.includes(file.type) ? URL.createObjectURL(file) : null,
+        fields: { projection: 'other', interval: '', caption: '' },
+        state: { kind: 'chosen' },
+      }),
+    );
     this.put([...this.uploads, ...added]);
   }
 
@@ -92,6 +104,8 @@ export class UploadQueue {
 
   remove(id: string): void {
     this.cancel(id);
+    const preview = this.uploads.find((upload) => upload.id === id)?.preview;
+    if (preview) URL.revokeObjectURL(preview);
     this.put(this.uploads.filter((upload) => upload.id !== id));
   }
 
