@@ -116,9 +116,12 @@ export class DraftSaver {
   }
 
   private run(): Promise<void> {
+    const sent = this.view.content;
     this.running ??= this.saveOnce().finally(() => {
       this.running = null;
-      if (this.view.saving.kind === 'saved') this.schedule(this.options.pause ?? 800);
+      // typed or settled while the request was on its way; a failure that may pass has its own timer
+      const { saving, content } = this.view;
+      if (content !== sent || saving.kind === 'unchanged') this.schedule(saving.kind === 'failed' && saving.retrying ? RETRY(0) : (this.options.pause ?? 800));
     });
     return this.running;
   }

@@ -4,7 +4,7 @@ import { TextSkeleton } from '@/components/page-states';
 import { caseQuery } from '@/features/cases/api/get-case';
 import { membersQuery } from '@/features/conferences/api/list-members';
 import { asProblem } from '@/lib/api/problem';
-import { useMe } from '@/lib/auth/session';
+import { roleIn, useMe } from '@/lib/auth/session';
 import { counted } from '@/lib/units';
 import { type Anchor, anchorWords, countThreads, type ThreadCounts, threadsAt } from '../anchors';
 import { type Thread, threadsQuery } from '../api/list-threads';
@@ -82,6 +82,8 @@ function Threads({ caseId, threads, anchor, words, mayWrite }: ThreadsProps) {
   const { data: found } = useQuery(caseQuery(caseId));
   const { data: members } = useQuery({ ...membersQuery(found?.conferenceId ?? ''), enabled: mayWrite && found !== undefined });
   const people = members?.items.map(({ person }) => person).filter(({ id }) => id !== me.id) ?? [];
+  const role = found ? roleIn(me, found.conferenceId) : null;
+  const mayTidy = role === 'chair' || role === 'coordinator';
   const isPresenter = found?.presenter.id === me.id;
   return (
     <>
@@ -89,7 +91,7 @@ function Threads({ caseId, threads, anchor, words, mayWrite }: ThreadsProps) {
         <ThreadView
           key={thread.id}
           lostAnchor={thread.anchorKind === anchor.anchorKind ? null : LOST[thread.anchorKind] ?? null}
-          {...{ caseId, thread, people, mayWrite, isPresenter }}
+          {...{ caseId, thread, people, mayWrite, mayTidy, isPresenter }}
         />
       ))}
       {mayWrite && <NewThread {...{ caseId, anchor, people }} about={words} mayAsk={!isPresenter} />}

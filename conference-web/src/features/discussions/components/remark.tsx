@@ -22,18 +22,20 @@ interface RemarkItemProps {
   repliesTo: string | null;
   people: Mentionable[];
   mayWrite: boolean;
+  /** Chair and coordinator may take away what should not stand there. */
+  mayTidy: boolean;
   onReply: () => void;
 }
 
 /** One remark: who, when, what; with what its author may do to it. */
-export function RemarkItem({ caseId, remark, repliesTo, people, mayWrite, onReply }: RemarkItemProps) {
+export function RemarkItem({ caseId, remark, repliesTo, people, mayWrite, mayTidy, onReply }: RemarkItemProps) {
   const element = useSeen(caseId, remark.id, remark.isNew);
   const [isEditing, setEditing] = useState(useHasKept(`remark:edit:${remark.id}`));
   const { author, createdAt, deletedAt } = remark;
   if (deletedAt !== null)
     return (
       <li ref={element} className={styles.gone}>
-        {author.name} deleted this remark, <time dateTime={deletedAt}>{formatDateTime(deletedAt)}</time>
+        A remark by {author.name} was deleted, <time dateTime={deletedAt}>{formatDateTime(deletedAt)}</time>
       </li>
     );
   return (
@@ -59,14 +61,18 @@ export function RemarkItem({ caseId, remark, repliesTo, people, mayWrite, onRepl
       ) : (
         <>
           <RichText content={remark.content} />
-          {mayWrite && <Actions caseId={caseId} remark={remark} onReply={onReply} onEdit={() => setEditing(true)} />}
+          {mayWrite && <Actions {...{ caseId, remark, mayTidy, onReply }} onEdit={() => setEditing(true)} />}
         </>
       )}
     </li>
   );
 }
 
-function Actions({ caseId, remark, onReply, onEdit }: { caseId: string; remark: Remark; onReply: () => void; onEdit: () => void }) {
+interface ActionsProps extends Pick<RemarkItemProps, 'caseId' | 'remark' | 'mayTidy' | 'onReply'> {
+  onEdit: () => void;
+}
+
+function Actions({ caseId, remark, mayTidy, onReply, onEdit }: ActionsProps) {
   const remove = useRemoveRemark(caseId);
   return (
     <div className={styles.actions}>
@@ -74,24 +80,24 @@ function Actions({ caseId, remark, onReply, onEdit }: { caseId: string; remark: 
         Reply
       </button>
       {remark.isMine && (
-        <>
-          <button type="button" className={styles.word} onClick={onEdit}>
-            Edit
-          </button>
-          <Confirm
-            title="Delete this remark"
-            confirmWord="Delete remark"
-            tone="grave"
-            onConfirm={() => remove.mutateAsync(remark.id)}
-            trigger={
-              <button type="button" className={styles.word}>
-                Delete
-              </button>
-            }
-          >
-            Its text is taken away for everyone. A mark stays that you said something here.
-          </Confirm>
-        </>
+        <button type="button" className={styles.word} onClick={onEdit}>
+          Edit
+        </button>
+      )}
+      {(remark.isMine || mayTidy) && (
+        <Confirm
+          title={remark.isMine ? 'Delete this remark' : `Delete the remark by ${remark.author.name}`}
+          confirmWord="Delete remark"
+          tone="grave"
+          onConfirm={() => remove.mutateAsync(remark.id)}
+          trigger={
+            <button type="button" className={styles.word}>
+              Delete
+            </button>
+          }
+        >
+          Its text is taken away for everyone, with its earlier texts. A mark stays that something was said here.
+        </Confirm>
       )}
     </div>
   );

@@ -19,11 +19,12 @@ interface ThreadViewProps {
   lostAnchor: string | null;
   people: Mentionable[];
   mayWrite: boolean;
+  mayTidy: boolean;
   isPresenter: boolean;
 }
 
 /** A remark or a question, with what was said to it. */
-export function ThreadView({ caseId, thread, lostAnchor, people, mayWrite, isPresenter }: ThreadViewProps) {
+export function ThreadView({ caseId, thread, lostAnchor, people, mayWrite, mayTidy, isPresenter }: ThreadViewProps) {
   const name = `reply:${thread.id}`;
   const [isOpen, setOpen] = useState(useHasKept(`remark:${name}`));
   const [replyToId, setReplyToId] = useState<string | null>(null);
@@ -51,6 +52,7 @@ export function ThreadView({ caseId, thread, lostAnchor, people, mayWrite, isPre
             repliesTo={nameAnswered(thread, index)}
             people={people}
             mayWrite={mayWrite}
+            mayTidy={mayTidy}
             onReply={() => reply(remark.id)}
           />
         ))}
