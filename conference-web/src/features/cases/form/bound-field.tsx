@@ -2,7 +2,10 @@ import type { FieldWords } from '@kerfside/calc/cases/field-words.js';
 import type { Words } from '@kerfside/calc/vocabulary/case-content.js';
 import { type ReactNode, useId, useState } from 'react';
 import { Field, SelectField, TextAreaField, TextField } from '@/components/field';
+import type { Schemas } from '@/lib/api/types';
+import { identifierRemedy, identifierWords, strengthWords } from '../identifier-words';
 import { type Binding, fieldPlace } from './binding';
+import { useFindingsAt } from './findings-context';
 import { NUMBER_LIMITS, TEXT_LIMITS } from './field-limits';
 import { NumberInput } from './number-input';
 import styles from './form.module.css';
@@ -29,10 +32,15 @@ export function BoundField<T extends object>({ of, name, label, hint, none = 'No
   const value = (of.value as Record<string, unknown>)[name];
   const set = (next: unknown) => of.update((old) => ({ ...old, [name]: next }));
   const error = problem ?? of.refusals.find(({ field }) => field === name)?.message;
+  const place = fieldPlace(of.section, of.path ? `${of.path}.${name}` : name);
+  const findings = useFindingsAt(place);
   const shared = { label: label ?? capital(words.label), hint, error };
   return (
-    <div className={styles.place} data-place={fieldPlace(of.section, of.path ? `${of.path}.${name}` : name)}>
+    <div className={styles.place} data-place={place}>
       {control(words)}
+      {findings.length > 0 && typeof value === 'string' && (
+        <FieldFindings findings={findings.filter(({ text }) => value.includes(text))} />
+      )}
     </div>
   );
 
@@ -74,6 +82,14 @@ export function BoundField<T extends object>({ of, name, label, hint, none = 'No
     }
   }
 }
+
+/** Stands at the field for as long as the text found is still in it. */
+const FieldFindings = ({ findings }: { findings: Schemas['IdentifierFindingDto'][] }) =>
+  findings.map(({ kind, text, start, strength }) => (
+    <p key={`${start} ${kind}`} className={styles.finding}>
+      ‘{text}’ {strengthWords[strength]} a {identifierWords(kind)}. {identifierRemedy(kind)}
+    </p>
+  ));
 
 interface ControlProps<V> {
   label: ReactNode;

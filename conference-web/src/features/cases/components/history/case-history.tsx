@@ -1,0 +1,68 @@
+import { SECTION_WORDS } from '@kerfside/calc/vocabulary/case.js';
+import { useInfiniteQuery } from '@tanstack/react-query';
+import { useState } from 'react';
+import { ErrorState, TableSkeleton } from '@/components/page-states';
+import { PersonLine } from '@/components/person-line';
+import { Section } from '@/components/section';
+import { ShowMore } from '@/components/show-more';
+import { formatDateTime, formatTime } from '@/lib/dates';
+import { versionsQuery } from '../../api/list-versions';
+import { groupVersions, type VersionGroup } from '../../version-groups';
+import { CompareVersions } from './compare-versions';
+import { Differences } from './differences';
+import styles from './history.module.css';
+
+/** Who changed what when, and any two versions side by side. */
+export function CaseHistory({ caseId }: { caseId: string }) {
+  const query = useInfiniteQuery(versionsQuery(caseId));
+  if (!query.data) {
+    if (query.error) return <ErrorState error={query.error} what="case" onRetry={() => void query.refetch()} />;
+    return <TableSkeleton rows={6} columns={3} />;
+  }
+  const versions = query.data.pages.flatMap(({ items }) => items);
+  return (
+    <>
+      <Section title="Compare two versions">
+        <CompareVersions caseId={caseId} versions={versions} />
+      </Section>
+      <Section title="Changes">
+        <ol className={styles.groups}>
+          {groupVersions(versions).map((group) => (
+            <li key={group.first}>
+              <Group caseId={caseId} group={group} />
+            </li>
+          ))}
+        </ol>
+        <ShowMore query={query} />
+      </Section>
+    </>
+  );
+}
+
+const span = ({ startedAt, endedAt }: VersionGroup) =>
+  formatDateTime(startedAt) === formatDateTime(endedAt) ? formatDateTime(endedAt) : `${formatDateTime(startedAt)} to ${formatTime(endedAt)}`;
+
+const numbers = ({ first, last }: VersionGroup) => (first === last ? `version ${last}` : `versions ${first} to ${last}`);
+
+/** One sitting; its differences are fetched when it is opened. */
+function Group({ caseId, group }: { caseId: string; group: VersionGroup }) {
+  const [isOpen, setOpen] = useState(false);
+  // the first version is the beginning and differs from nothing
+  const since = Math.max(1, group.first - 1);
+  const what = group.sections.length ? group.sections.map((section) => SECTION_WORDS[section]).join(', ') : 'Begun';
+  const head = (
+    <>
+      <strong>{what}</strong>
+      <span className="label-text">
+        {span(group)}, {numbers(group)}, <PersonLine person={group.author} short />
+      </span>
+    </>
+  );
+  if (group.last === since) return <div className={styles.begun}>{head}</div>;
+  return (
+    <details onToggle={(event) => setOpen(event.currentTarget.open)}>
+      <summary>{head}</summary>
+      {isOpen && <Differences caseId={caseId} since={since} version={group.last} />}
+    </details>
+  );
+}
