@@ -125,13 +125,10 @@ export class ImagesService {
   }
 
   private async undo(image: CaseImage): Promise<void> {
-    // files first: while the row is there the sweep knows them
-    try {
-      await this.storage.delete(imageKeys(image.id));
-      await this.dataSource.manager.delete(CaseImage, { id: image.id, state: 'storing' });
-    } catch {
-      // the sweep takes what is left
-    }
+    // the row first, whatever the store says: with it there the same file could not be sent again.
+    // Each is tried for itself; the sweep takes what is left, a row without files or files without a row.
+    await this.dataSource.manager.delete(CaseImage, { id: image.id, state: 'storing' }).catch(() => undefined);
+    await this.storage.delete(imageKeys(image.id)).catch(() => undefined);
   }
 
   private toDto(image: CaseImage): ImageDto {
