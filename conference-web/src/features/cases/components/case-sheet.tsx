@@ -1,4 +1,5 @@
 import type { Schemas } from '@/lib/api/types';
+import { DecisionPanel } from '@/features/decisions/components/decision-panel';
 import { RatingPanel } from '@/features/ratings/components/rating-panel';
 import { contentOf } from '../draft/use-case-draft';
 import { BoneSection } from './sheet/bone-section';
@@ -52,7 +53,7 @@ export function CaseSheet({ found }: { found: Schemas['CaseDto'] }) {
         {isDiscussed && (
           <div className={styles.panels}>
             <RatingPanel caseId={found.id} />
-            {/* The decision stands here: <DecisionPanel caseId={found.id} /> of features/decisions. */}
+            <DecisionPanel caseId={found.id} />
           </div>
         )}
       </div>
