@@ -1,7 +1,6 @@
 // npm run dev: the local services, the API rebuilt and restarted on a change, and Vite's own server.
 import { existsSync } from 'node:fs';
 import { join } from 'node:path';
-import { runMigrations, runSeed } from './lib/app.mjs';
 import { answers } from './lib/http.mjs';
 import { createLifecycle } from './lib/lifecycle.mjs';
 import { freePort } from './lib/ports.mjs';
@@ -9,7 +8,7 @@ import { projectRoot } from './lib/root.mjs';
 import { createService } from './lib/service.mjs';
 import { localAddress } from './lib/settings.mjs';
 import { bringUpStack } from './lib/stack.mjs';
-import { printError, step } from './lib/steps.mjs';
+import { printError } from './lib/steps.mjs';
 
 const root = projectRoot(import.meta.dirname);
 const lifecycle = createLifecycle();
@@ -35,10 +34,6 @@ async function start() {
   const workspaces = ['object-store-fake', 'mail-fake', 'conference-api'];
   const { settings, env, startService } = await bringUpStack({ root, lifecycle, workspaces });
   const environment = { ...env, NODE_ENV: 'development' };
-  await step('Migrations', () => runMigrations(root, environment));
-  lifecycle.check();
-  if (settings.KERFSIDE_DEMO === 'true') await step('Demo', () => runSeed(root, environment));
-
   // People use Vite's address; it passes /api on to the API on a port of its own.
   const apiPort = await freePort();
   const apiUrl = `http://127.0.0.1:${apiPort}`;

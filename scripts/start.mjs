@@ -1,11 +1,11 @@
 // npm start: everything from a bare checkout to the running application, on Node's own modules.
-import { createApi, demoAccounts, runMigrations, runSeed } from './lib/app.mjs';
+import { createApi, demoAccounts } from './lib/app.mjs';
 import { BUILDS } from './lib/builds.mjs';
 import { createLifecycle } from './lib/lifecycle.mjs';
 import { projectRoot } from './lib/root.mjs';
 import { localAddress } from './lib/settings.mjs';
 import { bringUpStack } from './lib/stack.mjs';
-import { printError, step } from './lib/steps.mjs';
+import { printError } from './lib/steps.mjs';
 
 const root = projectRoot(import.meta.dirname);
 const lifecycle = createLifecycle();
@@ -14,9 +14,6 @@ lifecycle.handleSignals(0, () => process.stdout.write('\nStopping …\n'));
 async function start() {
   const workspaces = BUILDS.map(({ workspace }) => workspace);
   const { settings, services, env, startService } = await bringUpStack({ root, lifecycle, workspaces });
-  await step('Migrations', () => runMigrations(root, env));
-  lifecycle.check();
-  if (settings.KERFSIDE_DEMO === 'true') await step('Demo', () => runSeed(root, env));
   await startService(createApi({ settings, env }));
   printReady(settings, services);
 }

@@ -1,6 +1,7 @@
-import { apiEnvironment, createLocalServices, wantedPorts } from './app.mjs';
+import { apiEnvironment, createLocalServices, runMigrations, runSeed, wantedPorts } from './app.mjs';
 import { BUILDS, buildWorkspace, isBuilt } from './builds.mjs';
 import { withCheckoutLock } from './checkout-lock.mjs';
+import { createFirstStart } from './first-start.mjs';
 import { checkNodeVersion, installMissing } from './install.mjs';
 import { checkPortsFree } from './ports.mjs';
 import { createRunningFile } from './running.mjs';
@@ -10,8 +11,8 @@ import { step } from './steps.mjs';
 import { createSupervisor } from './supervisor.mjs';
 
 /**
- * What `npm start` and `npm run dev` have in common, up to the local services running: checks first,
- * then what is missing, then the builds of `workspaces`. Answers what the rest needs.
+ * What `npm start` and `npm run dev` have in common, up to the API: checks first, then what is
+ * missing, the builds of `workspaces`, the local services, migrations and demo. Answers what the rest needs.
  */
 export async function bringUpStack({ root, lifecycle, workspaces }) {
   checkNodeVersion();
@@ -33,9 +34,24 @@ export async function bringUpStack({ root, lifecycle, workspaces }) {
   const services = createLocalServices({ settings, secrets });
   // Installing and building can take minutes in which another program may have come.
   await check();
+  const firstStart = createFirstStart(settings.KERFSIDE_DATA);
+  if (services.database && firstStart.begin()) say('The first start had not come to its end: it begins anew.');
   const startService = await supervise({ lifecycle, running });
   for (const service of [services.database, services.store, services.mail]) if (service) await startService(service);
-  return { settings, services, env: apiEnvironment({ settings, secrets, services }), startService };
+  const env = apiEnvironment({ settings, secrets, services });
+  await fillDatabase({ root, lifecycle, settings, env, firstStart });
+  return { settings, services, env, startService };
+}
+
+async function fillDatabase({ root, lifecycle, settings, env, firstStart }) {
+  await step('Migrations', () => runMigrations(root, env));
+  lifecycle.check();
+  if (settings.KERFSIDE_DEMO === 'true') {
+    const title = firstStart.isUnderWay ? 'Demo, its pictures being drawn' : 'Demo';
+    await step(title, () => runSeed(root, env));
+    lifecycle.check();
+  }
+  firstStart.finish();
 }
 
 async function installAndBuild({ root, lifecycle, settings, workspaces, purpose }) {
