@@ -9,8 +9,9 @@ export interface Column<T> {
   /** The name this column sorts by. */
   sort?: string;
   align?: 'right';
-  /** On a phone the cell stands without its label. */
-  bare?: boolean;
+  /** On a phone the cell stands without its label: on a line of its own, or beside its neighbours. */
+  fold?: 'bare' | 'inline';
+  nowrap?: boolean;
 }
 
 export interface Sorting {
@@ -69,8 +70,10 @@ export function DataTable<T>({ caption, columns, rows, rowKey, linked = false, s
   );
 }
 
+const classNames = (...names: (string | false | undefined)[]) => names.filter(Boolean).join(' ') || undefined;
+
 function Cell<T>({ column, isRowHead, content }: { column: Column<T>; isRowHead: boolean; content: ReactNode }) {
-  const className = column.align && styles[column.align];
+  const className = classNames(column.align && styles[column.align], column.nowrap && styles.nowrap, column.fold === 'inline' && styles.inline);
   if (isRowHead)
     return (
       <th role="rowheader" scope="row" className={className}>
@@ -79,8 +82,8 @@ function Cell<T>({ column, isRowHead, content }: { column: Column<T>; isRowHead:
     );
   const isEmpty = content === null || content === undefined || content === '';
   return (
-    <td role="cell" className={className} data-label={column.bare ? undefined : column.head} data-empty={isEmpty || undefined}>
-      {column.bare || isEmpty ? content : <div>{content}</div>}
+    <td role="cell" className={className} data-label={column.fold ? undefined : column.head} data-empty={isEmpty || undefined}>
+      {column.fold || isEmpty ? content : <div>{content}</div>}
     </td>
   );
 }

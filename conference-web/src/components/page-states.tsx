@@ -52,37 +52,54 @@ export function PageSkeleton() {
 
 interface StateProps {
   title: string;
+  /** Stands for the whole page, so its title is the page's h1. */
+  isPage?: boolean;
   children?: ReactNode;
   action?: ReactNode;
 }
 
 /** Nothing here: what this is, and the one next thing to do. */
-export function EmptyState({ title, children, action }: StateProps) {
+export function EmptyState({ title, isPage, children, action }: StateProps) {
+  const Title = isPage ? 'h1' : 'h2';
   return (
     <div className={styles.state}>
-      <h2>{title}</h2>
+      <Title>{title}</Title>
       {children && <p>{children}</p>}
       {action && <div className={styles.row}>{action}</div>}
     </div>
   );
 }
 
-export function NoPermission({ children, action }: { children?: ReactNode; action?: ReactNode }) {
+export function NoPermission({ isPage, children, action }: Omit<StateProps, 'title'>) {
   return (
-    <EmptyState title="You may not see this" action={action}>
+    <EmptyState title="You may not see this" isPage={isPage} action={action}>
       {children ?? 'Your role in this conference does not include it. The chair or the coordinator can tell you who may.'}
     </EmptyState>
   );
 }
 
+interface ErrorStateProps {
+  error: unknown;
+  onRetry?: () => void;
+  /** 'case', 'meeting': for the words of a 404. */
+  what?: string;
+  isPage?: boolean;
+}
+
 /** What happened, what is safe, what to do. Refusals of access read as such. */
-export function ErrorState({ error, onRetry, what }: { error: unknown; onRetry?: () => void; what?: string }) {
+export function ErrorState({ error, onRetry, what, isPage }: ErrorStateProps) {
+  const Title = isPage ? 'h1' : 'h2';
   const problem = asProblem(error);
-  if (problem.status === 403) return <NoPermission>{problem.detail}</NoPermission>;
-  if (problem.status === 404) return <EmptyState title={what ? `There is no such ${what}` : 'Not found'}>{problem.detail}</EmptyState>;
+  if (problem.status === 403) return <NoPermission isPage={isPage}>{problem.detail}</NoPermission>;
+  if (problem.status === 404)
+    return (
+      <EmptyState title={what ? `There is no such ${what}` : 'Not found'} isPage={isPage}>
+        {problem.detail}
+      </EmptyState>
+    );
   return (
     <div className={styles.state} role="alert">
-      <h2>{problem.title}</h2>
+      <Title>{problem.title}</Title>
       <p>{problem.detail}</p>
       {onRetry && (
         <Button variant="soft" onClick={onRetry}>
@@ -98,13 +115,15 @@ interface LoadedProps<T> {
   skeleton: ReactNode;
   /** 'case', 'meeting': for the words of a 404. */
   what?: string;
+  /** The data is the page: its error is the page's h1. */
+  isPage?: boolean;
   children: (data: T) => ReactNode;
 }
 
 /** The skeleton, the error, or the page. What is already there stays in view while it is asked for again. */
-export function Loaded<T>({ query, skeleton, what, children }: LoadedProps<T>) {
+export function Loaded<T>({ query, skeleton, what, isPage, children }: LoadedProps<T>) {
   if (query.data !== undefined && asStatus(query.error) !== 404 && asStatus(query.error) !== 403) return children(query.data);
-  if (query.error) return <ErrorState error={query.error} what={what} onRetry={() => void query.refetch()} />;
+  if (query.error) return <ErrorState error={query.error} what={what} isPage={isPage} onRetry={() => void query.refetch()} />;
   return skeleton;
 }
 

@@ -4,5 +4,5 @@ import { ErrorState } from './page-states';
 
 /** A page that failed while it was drawn or fetched. A new version may have replaced its file: loading again helps. */
 export function RouteError() {
-  return <ErrorState error={asProblem(useRouteError())} onRetry={() => location.reload()} />;
+  return <ErrorState isPage error={asProblem(useRouteError())} onRetry={() => location.reload()} />;
 }

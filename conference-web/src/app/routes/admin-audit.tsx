@@ -37,6 +37,7 @@ export function Component() {
       ),
     [setAddress],
   );
+  const showCase = useCallback((caseId: string) => change('caseId', caseId), [change]);
   const searchAction = useCallback((text: string) => change('action', text), [change]);
   return (
     <Page title="Audit" heading="Audit trail">
@@ -53,12 +54,12 @@ export function Component() {
           </Button>
         )}
       </Flex>
-      <Entries filter={filter} />
+      <Entries filter={filter} onCase={filter.caseId ? undefined : showCase} />
     </Page>
   );
 }
 
-function Entries({ filter }: { filter: AuditFilter }) {
+function Entries({ filter, onCase }: { filter: AuditFilter; onCase?: (caseId: string) => void }) {
   const query = useInfiniteQuery(auditQuery(filter));
   if (!query.data) {
     if (query.error) return <ErrorState error={query.error} onRetry={() => void query.refetch()} />;
@@ -68,7 +69,7 @@ function Entries({ filter }: { filter: AuditFilter }) {
   if (entries.length === 0) return <EmptyState title="No entries">Nothing that fits has been done yet.</EmptyState>;
   return (
     <>
-      <AuditTable entries={entries} />
+      <AuditTable entries={entries} onCase={onCase} />
       <ShowMore query={query} />
     </>
   );

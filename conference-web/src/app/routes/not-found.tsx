@@ -6,7 +6,7 @@ import { useTitle } from '@/lib/use-title';
 export function Component() {
   useTitle('Not found');
   return (
-    <EmptyState title="There is no page at this address" action={<Link to={paths.cases}>Go to the cases</Link>}>
+    <EmptyState isPage title="There is no page at this address" action={<Link to={paths.cases}>Go to the cases</Link>}>
       The address may be mistyped, or the page may have been moved.
     </EmptyState>
   );

@@ -12,7 +12,7 @@ export function RequireSession() {
     case 'loading':
       return <PageSkeleton />;
     case 'unreachable':
-      return <ErrorState error={state.error} onRetry={retry} />;
+      return <ErrorState isPage error={state.error} onRetry={retry} />;
     case 'signed-out':
       return <Navigate to={paths.signIn(location.pathname + location.search)} replace />;
     case 'ended':

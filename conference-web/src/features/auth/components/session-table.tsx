@@ -6,6 +6,7 @@ import { Loaded, TableSkeleton } from '@/components/page-states';
 import { Section } from '@/components/section';
 import type { Schemas } from '@/lib/api/types';
 import { formatDateTime } from '@/lib/dates';
+import { deviceWords } from '../device-words';
 import { useEndOtherSessions, useEndSession } from '../api/end-sessions';
 import { sessionsQuery } from '../api/list-sessions';
 
@@ -20,22 +21,26 @@ function EndSession({ session }: { session: SessionRow }) {
       confirmWord="End session"
       onConfirm={() => mutateAsync(session.id)}
       trigger={
-        <Button variant="soft" size="2" data-list-item aria-label={`End session on ${session.device}`}>
+        <Button variant="soft" size="2" data-list-item aria-label={`End session on ${deviceWords(session.device)}`}>
           End
         </Button>
       }
     >
-      {session.device} has to sign in again.
+      {deviceWords(session.device)} has to sign in again.
     </Confirm>
   );
 }
 
 const columns: Column<SessionRow>[] = [
-  { key: 'device', head: 'Device', cell: ({ device, isCurrent }) => (isCurrent ? <strong>{device} (this one)</strong> : device) },
+  {
+    key: 'device',
+    head: 'Device',
+    cell: ({ device, isCurrent }) => <span title={device}>{isCurrent ? <strong>{deviceWords(device)} (this one)</strong> : deviceWords(device)}</span>,
+  },
   { key: 'address', head: 'Address', cell: ({ address }) => address },
-  { key: 'since', head: 'Signed in', cell: ({ createdAt }) => <time dateTime={createdAt}>{formatDateTime(createdAt)}</time> },
-  { key: 'used', head: 'Last used', cell: ({ lastUsedAt }) => <time dateTime={lastUsedAt}>{formatDateTime(lastUsedAt)}</time> },
-  { key: 'end', head: 'End', bare: true, align: 'right', cell: (session) => (session.isCurrent ? null : <EndSession session={session} />) },
+  { key: 'since', head: 'Signed in', nowrap: true, cell: ({ createdAt }) => <time dateTime={createdAt}>{formatDateTime(createdAt)}</time> },
+  { key: 'used', head: 'Last used', nowrap: true, cell: ({ lastUsedAt }) => <time dateTime={lastUsedAt}>{formatDateTime(lastUsedAt)}</time> },
+  { key: 'end', head: 'End', fold: 'bare', align: 'right', cell: (session) => (session.isCurrent ? null : <EndSession session={session} />) },
 ];
 
 /** Where the person is signed in, each to be ended. */

@@ -14,11 +14,13 @@ function CaseLink({ item }: { item: Item }) {
   const to = item.stage === 'draft' && item.isMine ? paths.editCase(item.id) : paths.case(item.id);
   return (
     <>
+      <span className={styles.code}>
+        {item.code}
+        <span className={styles.presenter}>{item.isMine ? 'You present it' : item.presenter.name}</span>
+      </span>
       <Link to={to} className={styles.title} data-list-item>
-        <span className={styles.code}>{item.code}</span>
         {item.title || 'Without a title'}
       </Link>
-      <span className={styles.presenter}>{item.isMine ? 'You present it' : item.presenter.name}</span>
     </>
   );
 }
@@ -43,13 +45,19 @@ const jointAndSide = ({ side, joint }: Item) => (side ? `${SIDE_WORDS[side]} ${J
 
 const columns: Column<Item>[] = [
   { key: 'case', head: 'Case', sort: 'code', cell: (item) => <CaseLink item={item} /> },
-  { key: 'joint', head: 'Joint', cell: jointAndSide },
-  { key: 'stage', head: 'Stage', cell: (item) => <StageWord stage={item.stage} /> },
-  { key: 'urgency', head: 'Urgency', sort: 'urgency', cell: (item) => <UrgencyWord urgency={item.urgency} /> },
-  { key: 'for-you', head: 'For you', cell: (item) => (hasForYou(item) ? <ForYou item={item} /> : null) },
+  { key: 'joint', head: 'Joint', nowrap: true, fold: 'inline', cell: jointAndSide },
+  { key: 'stage', head: 'Stage', fold: 'inline', cell: (item) => <StageWord stage={item.stage} /> },
+  { key: 'urgency', head: 'Urgency', sort: 'urgency', nowrap: true, fold: 'inline', cell: (item) => <UrgencyWord urgency={item.urgency} /> },
+  { key: 'for-you', head: 'For you', nowrap: true, fold: 'bare', cell: (item) => (hasForYou(item) ? <ForYou item={item} /> : null) },
   { key: 'ratings', head: 'Ratings', align: 'right', cell: (item) => item.ratings },
-  { key: 'meeting', head: 'Meeting', cell: (item) => item.meetingAt && <time dateTime={item.meetingAt}>{formatDate(item.meetingAt)}</time> },
-  { key: 'updated', head: 'Changed', sort: 'updated', cell: (item) => <time dateTime={item.updatedAt}>{formatDate(item.updatedAt)}</time> },
+  { key: 'meeting', head: 'Meeting', nowrap: true, cell: (item) => item.meetingAt && <time dateTime={item.meetingAt}>{formatDate(item.meetingAt)}</time> },
+  {
+    key: 'updated',
+    head: 'Changed',
+    sort: 'updated',
+    nowrap: true,
+    cell: (item) => <time dateTime={item.updatedAt}>{formatDate(item.updatedAt)}</time>,
+  },
 ];
 
 export function CaseTable({ items, sorting, onSort }: { items: Item[]; sorting: Sorting; onSort: (by: string) => void }) {

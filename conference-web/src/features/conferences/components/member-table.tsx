@@ -59,7 +59,7 @@ function columnsFor(conferenceId: string, mayChange: boolean): Column<Member>[] 
     { key: 'role', head: 'Role', cell: (member) => (mayChange ? <RoleChoice conferenceId={conferenceId} member={member} /> : ROLE_WORDS[member.role]) },
   ];
   if (!mayChange) return read;
-  return [...read, { key: 'remove', head: 'Remove', bare: true, align: 'right', cell: (member) => <RemoveMember conferenceId={conferenceId} member={member} /> }];
+  return [...read, { key: 'remove', head: 'Remove', fold: 'bare', align: 'right', cell: (member) => <RemoveMember conferenceId={conferenceId} member={member} /> }];
 }
 
 export function MemberTable({ conferenceId }: { conferenceId: string }) {

@@ -80,7 +80,7 @@ const columns: Column<Mail>[] = [
   {
     key: 'settle',
     head: 'Settle',
-    bare: true,
+    fold: 'bare',
     cell: (mail) => (mail.state === 'failed' || mail.state === 'uncertain' ? <Settle mail={mail} /> : null),
   },
 ];

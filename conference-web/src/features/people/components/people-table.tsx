@@ -14,7 +14,7 @@ function InviteAgain({ person }: { person: Person }) {
   if (invite.isSuccess) return <span role="status">Invitation sent</span>;
   return (
     <>
-      <Button variant="soft" color="gray" size="2" loading={invite.isPending} aria-label={`Invite ${person.name} again`} onClick={() => invite.mutate(person.id)}>
+      <Button variant="soft" color="gray" size="2" loading={invite.isPending} aria-label={`Invite again: ${person.name}`} onClick={() => invite.mutate(person.id)}>
         Invite again
       </Button>
       {invite.error && <span role="alert">{asProblem(invite.error).detail}</span>}
@@ -51,7 +51,7 @@ const columns: Column<Person>[] = [
   {
     key: 'edit',
     head: 'Change',
-    bare: true,
+    fold: 'bare',
     align: 'right',
     cell: (person) => (
       <div className={styles['row-buttons']}>

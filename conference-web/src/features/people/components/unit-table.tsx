@@ -53,7 +53,7 @@ const columns: Column<Unit>[] = [
   {
     key: 'edit',
     head: 'Change',
-    bare: true,
+    fold: 'bare',
     align: 'right',
     cell: (unit) => (
       <WriteUnit
