@@ -32,12 +32,27 @@ function sentence(statement: string): string {
 const kebab = (text: string) => text.replace(/([a-z0-9])([A-Z])/g, '$1-$2').toLowerCase();
 const literal = (text: string) => `\`${text.replace(/\\/g, '\\\\').replace(/`/g, '\\`').replace(/\$\{/g, '\\${')}\``;
 
-const { upQueries, downQueries } = await dataSource.driver.createSchemaBuilder().log();
+/** The statement that takes one back; the builder's own list of them does not pair up with the others. */
+function inverse(statement: string): string {
+  const rules: [RegExp, string][] = [
+    [/^CREATE TABLE (`[^`]+`)/, 'DROP TABLE $1'],
+    [/^ALTER TABLE (`[^`]+`) ADD CONSTRAINT (`[^`]+`) FOREIGN KEY/, 'ALTER TABLE $1 DROP FOREIGN KEY $2'],
+    [/^CREATE (?:UNIQUE |FULLTEXT )?INDEX (`[^`]+`) ON (`[^`]+`)/, 'DROP INDEX $1 ON $2'],
+    [/^ALTER TABLE (`[^`]+`) ADD (?:UNIQUE |FULLTEXT )?INDEX (`[^`]+`)/, 'DROP INDEX $2 ON $1'],
+    [/^ALTER TABLE (`[^`]+`) ADD (`[^`]+`)/, 'ALTER TABLE $1 DROP COLUMN $2'],
+  ];
+  for (const [pattern, replacement] of rules) {
+    const match = pattern.exec(statement);
+    if (match) return replacement.replace(/\$(\d)/g, (_, group: string) => match[Number(group)]!);
+  }
+  return "SIGNAL SQLSTATE '45000' SET MESSAGE_TEXT = 'write by hand how this one is taken back'";
+}
+
+const { upQueries } = await dataSource.driver.createSchemaBuilder().log();
 const start = Date.now();
 upQueries.forEach(({ query }, index) => {
   const name = sentence(query);
   const stamp = start + index;
-  const down = downQueries[index]?.query;
   writeFileSync(
     join(folder, `${stamp}-${kebab(name)}.ts`),
     `import type { MigrationInterface, QueryRunner } from 'typeorm';
@@ -48,7 +63,7 @@ export class ${name}${stamp} implements MigrationInterface {
   }
 
   async down(queryRunner: QueryRunner): Promise<void> {
-    await queryRunner.query(${literal(down ?? 'SELECT 1')});
+    await queryRunner.query(${literal(inverse(query))});
   }
 }
 `,

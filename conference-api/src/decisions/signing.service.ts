@@ -46,7 +46,8 @@ export class SigningService {
       await this.refuseUnready(tx.manager, found, draft);
       const conference = await tx.manager.findOneOrFail(Conference, { where: { id: found.conferenceId }, lock: { mode: 'pessimistic_write' } });
       await this.seal(tx, actor, found, draft, conference);
-      await tx.manager.update(Conference, { id: conference.id }, { lastDecisionNumber: draft.number! });
+      // not through the entity: counting must not raise the version that a settings form was opened on
+      await tx.manager.query('UPDATE conferences SET lastDecisionNumber = ? WHERE id = ?', [draft.number, conference.id]);
       if (found.stage === 'listed') {
         await tx.manager.update(Case, { id: caseId }, { stage: 'decided', updatedAt: tx.now });
         await tx.manager.update(AgendaItem, { caseId, state: 'listed' }, { state: 'decided' });
