@@ -22,6 +22,8 @@ export function SessionProvider({ children }: { children: ReactNode }) {
       setState((before) => {
         // another person at the same page must not see what the first had open
         if (before.status === 'ended' && before.me.id !== me.id) location.reload();
+        // what was refused meanwhile
+        else if (before.status === 'ended') void client.invalidateQueries();
         return { status: 'signed-in', me };
       });
       tellOtherTabs({ kind: 'signed-in', personId: me.id });
