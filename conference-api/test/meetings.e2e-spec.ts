@@ -7,7 +7,7 @@ import { Meeting } from '../src/meetings/entities/meeting.entity.js';
 import { makeCase } from './factories/case-rows.js';
 import { createMeeting, makeListable } from './factories/slots.js';
 import { makeWorld, type World } from './factories/world.js';
-import { mailsTo } from './support/mail.js';
+import { mailsTo, rawOf } from './support/mail.js';
 import { queriesOf } from './support/query-count.js';
 import { startTestApp, type TestApp } from './support/test-app.js';
 
@@ -203,6 +203,12 @@ describe('meetings', () => {
       expect(items[0]).toMatchObject({ id: unready.id, canBeListed: false, urgency: 'urgent' });
       expect(items[0].missing.length).toBeGreaterThan(0);
       expect(items.find((item: { id: string }) => item.id === ready.id)).toMatchObject({ canBeListed: true, missing: [], ratings: 0 });
+      // two members rate, one of them twice: two have rated
+      const ratings = (ready.content.options.options ?? []).map(({ id }, index) => ({ optionId: id, value: index + 4 }));
+      for (const name of ['panellist', 'microbiology', 'panellist'] as const)
+        expect((await test.http().put(`/api/cases/${ready.id}/rounds/1/rating`).set(as(name)).send({ ratings })).status).toBe(200);
+      const set = await setAgenda(meeting.id, 1, [{ caseId: ready.id, minutes: 10 }]);
+      expect(set.body.items[0].ratings).toBe(2);
       expect((await test.http().get(`/api/meetings/${meeting.id}/listable-cases`).set(as('surgeon'))).status).toBe(403);
     });
   });
@@ -279,8 +285,8 @@ describe('meetings', () => {
       const event = calendar.getFirstSubcomponent('vevent')!;
       expect(event.getFirstPropertyValue('uid')).toBe(`meeting-${meeting.id}@kerfside.example`);
       expect(event.getFirstPropertyValue('sequence')).toBe(1);
-      // RFC 6047, 2.4: the parameter of the part says the same as the calendar
-      expect(mail.attachments.some(({ contentType }) => contentType.startsWith('text/calendar') || contentType === 'application/ics')).toBe(true);
+      // RFC 6047, 2.4: the part's parameter says the same as the calendar in it
+      expect(await rawOf(mail)).toMatch(/^Content-Type: text\/calendar;[^\n]*(\n\s[^\n]*)*method=CANCEL/im);
       expect(mail.text).not.toContain('flooded');
       expect((await post(`${meeting.id}/cancel`, { reason: 'again' })).status).toBe(409);
       expect((await post(`${meeting.id}/start`)).status).toBe(409);
@@ -314,6 +320,22 @@ describe('meetings', () => {
       // both can stand on a later agenda
       const next = await createMeeting(test, world, 21);
       expect((await setAgenda(next.id, 1, [{ caseId: first.id, minutes: 20 }, { caseId: second.id, minutes: 20 }])).status).toBe(200);
+    });
+
+    it('is not closed over a decision that is written and not signed', async () => {
+      const found = await makeListable(test, world);
+      const meeting = await createMeeting(test, world, 25);
+      const { body } = await setAgenda(meeting.id, 1, [{ caseId: found.id, minutes: 20 }]);
+      await post(`${meeting.id}/start`);
+      const draft = { text: 'Remove the shell', dissent: [] };
+      const written = await test.http().put(`/api/cases/${found.id}/decision`).set(as('chair')).send(draft);
+      expect(written.status).toBe(200);
+      const refused = await post(`${meeting.id}/close`);
+      expect(refused.status).toBe(409);
+      expect(refused.body).toMatchObject({ type: 'urn:kerfside:problem:conflict', codes: [found.code] });
+      expect((await get(meeting.id)).body.state).toBe('running');
+      await post(`${meeting.id}/items/${body.items[0].id}/defer`, { reason: 'No agreement' });
+      expect((await post(`${meeting.id}/close`)).status).toBe(200);
     });
 
     it('counts attendance and quorum as it is noted', async () => {

@@ -19,3 +19,6 @@ export async function mailsTo(address: string): Promise<CaughtMail[]> {
   const list = (await (await fetch(`${base()}/api/messages?to=${encodeURIComponent(address)}`)).json()) as { id: string }[];
   return Promise.all(list.map(async ({ id }) => (await (await fetch(`${base()}/api/messages/${id}`)).json()) as CaughtMail));
 }
+
+/** The mail as it came over the wire. */
+export const rawOf = async (mail: CaughtMail): Promise<string> => (await (await fetch(`${base()}/api/messages/${mail.id}/raw`)).text()).replaceAll('\r\n', '\n');
