@@ -10,8 +10,10 @@ export const createQueryClient = () =>
         // live events say what changed, so data is not asked for again at every look
         staleTime: 30_000,
         retry: worthRetrying,
+        // without a connection it fails at once and says so, rather than waiting in silence
+        networkMode: 'always',
         retryDelay: (attempt) => Math.min(1000 * 2 ** attempt, 8000),
       },
-      mutations: { retry: false },
+      mutations: { retry: false, networkMode: 'always' },
     },
   });
