@@ -70,10 +70,11 @@ function Lane({ round, dots, top, ground }: LaneProps) {
           data-high={high}
         />
       )}
+      {/* behind the dots, so that it hides none of them */}
+      {median !== null && <line className={styles.median} x1={placeOf(median)} x2={placeOf(median)} y1={top - 4} y2={ground + 10} data-median={median} />}
       {dots.map(({ rating, x, up }) => (
         <circle key={`${rating} ${up}`} cx={x} cy={ground - GROUND / 2 - DOT - up} r={DOT - 0.5} data-rating={rating} />
       ))}
-      {median !== null && <line className={styles.median} x1={placeOf(median)} x2={placeOf(median)} y1={top - 3} y2={ground + 9} data-median={median} />}
     </g>
   );
 }

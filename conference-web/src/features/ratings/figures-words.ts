@@ -29,7 +29,8 @@ export function verdictWords({ n, values }: Figures): string {
   return `${word}${disagreement ? ', with disagreement' : ''}: ${countWords(values)}`;
 }
 
-/** `n = 9, median 7, range 4 to 9`. */
+/** `n = 9, median 7, range 4 to 9`; lines break only between them. */
 export function figureWords({ n, median, low, high }: Figures): string {
-  return n === 0 ? 'n = 0' : `n = ${n}, median ${median}, range ${low} to ${high}`;
+  const words = n === 0 ? ['n = 0'] : [`n = ${n}`, `median ${median}`, `range ${low} to ${high}`];
+  return words.map((word) => word.replaceAll(' ', '\u00a0')).join(', ');
 }
