@@ -60,11 +60,16 @@ function EditableAgenda({ meeting }: { meeting: Meeting }) {
   const draft = useAgendaDraft(meeting);
   return (
     <>
-      <Section title="Running order">
-        <AgendaEditor meeting={meeting} draft={draft} />
-        {!draft.isDirty && meeting.items.length > 0 && <AgendaTable meeting={meeting} />}
-      </Section>
+      <div className="print-only">
+        <Section title="Running order">
+          <AgendaView meeting={meeting} />
+        </Section>
+      </div>
       <div className="print-hidden">
+        <Section title="Running order">
+          <AgendaEditor meeting={meeting} draft={draft} />
+          {!draft.isDirty && meeting.items.length > 0 && <AgendaTable meeting={meeting} />}
+        </Section>
         <ListableCases meeting={meeting} draft={draft} />
         <SendAgenda meeting={meeting} isDirty={draft.isDirty} />
       </div>

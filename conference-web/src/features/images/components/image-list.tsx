@@ -88,7 +88,7 @@ function ImageRow({ caseId, image, index, count, onMove }: ImageRowProps) {
           tone="grave"
           onConfirm={() => remove(image.id)}
           trigger={
-            <Button type="button" variant="soft" color="red" aria-label={`Remove ${words}`}>
+            <Button type="button" variant="soft" color="gray" highContrast aria-label={`Remove ${words}`}>
               Remove
             </Button>
           }

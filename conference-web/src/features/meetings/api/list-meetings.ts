@@ -8,7 +8,7 @@ export interface MeetingListFilter {
   conferenceId?: string;
 }
 
-const PAGE_SIZE = 20;
+const PAGE_SIZE = 10;
 
 export const meetingListQuery = ({ when, conferenceId }: MeetingListFilter) =>
   infiniteQueryOptions({

@@ -47,10 +47,11 @@ export function AgendaEditor({ meeting, draft }: EditorProps) {
   };
   return (
     <>
+      {draft.isStale && <StaleAgenda draft={draft} nameOf={nameOf} />}
       <p className={styles.summary} role="status">
         {agendaSummary(slots.length, plannedMinutes(draft.entries), meeting.minutes)}
       </p>
-      <RunningOrder label="Running order" slots={slots} startsAt={meeting.startsAt} minutes={meeting.minutes} neededPx={isNarrow ? 104 : 58} onMove={move}>
+      <RunningOrder label="Running order" slots={slots} startsAt={meeting.startsAt} minutes={meeting.minutes} neededPx={isNarrow ? 128 : 58} onMove={move}>
         {({ slot, from }, index) => (
           <EditSlot
             item={cases.get(slot.id)}
@@ -64,7 +65,7 @@ export function AgendaEditor({ meeting, draft }: EditorProps) {
       <p className="visually-hidden" role="status">
         {said}
       </p>
-      <SaveAgenda {...{ meeting, draft, nameOf }} />
+      <SaveAgenda draft={draft} />
     </>
   );
 }
@@ -119,11 +120,11 @@ function EditSlot({ item, index, count, minutes, beginsAt, draft, move }: EditSl
   );
 }
 
-function SaveAgenda({ draft, nameOf }: EditorProps & { nameOf: (caseId: string) => string }) {
+function SaveAgenda({ draft }: Pick<EditorProps, 'draft'>) {
   const { isDirty, isStale, isSaving, error } = draft;
   return (
     <div className={styles.save} data-dirty={isDirty || undefined}>
-      {isStale ? <StaleAgenda draft={draft} nameOf={nameOf} /> : <FormProblem error={error} />}
+      {!isStale && <FormProblem error={error} />}
       <Flex gap="3" align="center" wrap="wrap">
         <Button onClick={() => void draft.save()} loading={isSaving} disabled={!isDirty || isStale}>
           Save agenda

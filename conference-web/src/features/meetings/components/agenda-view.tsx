@@ -3,6 +3,7 @@ import { RunningOrder } from '@/components/running-order/running-order';
 import { layOutSlots } from '@/components/running-order/running-order-scale';
 import { formatTime, zoneName } from '@/lib/dates';
 import { counted, quantity } from '@/lib/units';
+import { useMediaQuery } from '@/lib/use-media-query';
 import type { AgendaItem, Meeting } from '../api/get-meeting';
 import { SlotText } from './agenda-slot';
 import styles from './agenda.module.css';
@@ -18,11 +19,12 @@ export function agendaSummary(count: number, planned: number, minutes: number): 
 /** The agenda to read: the running order, and the same as a table. */
 export function AgendaView({ meeting }: { meeting: Meeting }) {
   const { items, startsAt, minutes } = meeting;
+  const isNarrow = useMediaQuery('(max-width: 640px)');
   if (items.length === 0) return <p className="label-text">No case is listed yet.</p>;
   return (
     <>
       <p className={styles.summary}>{agendaSummary(items.length, meeting.plannedMinutes, minutes)}</p>
-      <RunningOrder label="Running order" slots={items} startsAt={startsAt} minutes={minutes} isDone={({ state }) => state !== 'listed'}>
+      <RunningOrder label="Running order" slots={items} startsAt={startsAt} minutes={minutes} neededPx={isNarrow ? 72 : 46} isDone={({ state }) => state !== 'listed'}>
         {({ slot }) => <SlotText item={slot} minutes={slot.minutes} />}
       </RunningOrder>
       <AgendaTable meeting={meeting} />
@@ -43,10 +45,31 @@ export function AgendaTable({ meeting: { items, startsAt, minutes } }: { meeting
     { key: 'state', head: 'State', cell: ({ slot }) => stateWords(slot) },
   ];
   return (
-    <details className={styles.table}>
-      <summary>The running order as a table</summary>
-      <DataTable caption="Running order" columns={columns} rows={placed} rowKey={({ slot }) => slot.id} />
-    </details>
+    <>
+      <details className={`${styles.table} print-hidden`}>
+        <summary>The running order as a table</summary>
+        <DataTable caption="Running order" columns={columns} rows={placed} rowKey={({ slot }) => slot.id} />
+      </details>
+      {/* paper has no fold to open */}
+      <table className={`${styles.paper} print-only`}>
+        <thead>
+          <tr>
+            {columns.map(({ key, head }) => (
+              <th key={key}>{head}</th>
+            ))}
+          </tr>
+        </thead>
+        <tbody>
+          {placed.map((row) => (
+            <tr key={row.slot.id}>
+              {columns.map(({ key, cell }) => (
+                <td key={key}>{cell(row)}</td>
+              ))}
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </>
   );
 }
 

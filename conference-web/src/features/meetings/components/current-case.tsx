@@ -7,6 +7,7 @@ import { paths } from '@/app/paths';
 import { Confirm } from '@/components/confirm';
 import { useKey } from '@/components/keys/use-key';
 import { PersonLine } from '@/components/person-line';
+import { DecisionPanel } from '@/features/decisions/components/decision-panel';
 import { RatingPanel } from '@/features/ratings/components/rating-panel';
 import type { AgendaItem, Meeting } from '../api/get-meeting';
 import { useDeferItem } from '../api/run-meeting';
@@ -46,6 +47,7 @@ export function CurrentCase({ meeting, item, choose, timer }: CurrentCaseProps) 
       </Flex>
       {isLeading && item.state === 'listed' && <RoundControl key={item.caseId} caseId={item.caseId} isRunning={isRunning} />}
       <RatingPanel key={`rating ${item.caseId}`} caseId={item.caseId} />
+      <DecisionPanel key={`decision ${item.caseId}`} caseId={item.caseId} />
     </article>
   );
 }

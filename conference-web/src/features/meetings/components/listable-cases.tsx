@@ -41,11 +41,11 @@ export function ListableCases({ meeting, draft }: { meeting: Meeting; draft: Age
     {
       key: 'list',
       head: 'List',
-      bare: true,
+      fold: 'bare',
       align: 'right',
       cell: ({ id, code, canBeListed }) =>
         canBeListed && (
-          <Button size="2" variant="soft" aria-label={`List ${code}`} onClick={() => draft.add(id, minutesBefore.get(id) ?? FIRST_MINUTES)}>
+          <Button size="2" variant="soft" aria-label={`List case ${code}`} onClick={() => draft.add(id, minutesBefore.get(id) ?? FIRST_MINUTES)}>
             List case
           </Button>
         ),

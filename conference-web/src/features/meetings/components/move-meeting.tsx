@@ -60,7 +60,7 @@ export function CancelMeeting({ meeting }: { meeting: Meeting }) {
       reason={{ label: 'Reason', hint: 'Members read it. No clinical detail.', maxLength: 1000 }}
       onConfirm={mutateAsync}
       trigger={
-        <Button variant="soft" color="red">
+        <Button variant="soft" color="gray" highContrast>
           Cancel meeting
         </Button>
       }

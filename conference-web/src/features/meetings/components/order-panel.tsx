@@ -2,6 +2,7 @@ import { RunningOrder } from '@/components/running-order/running-order';
 import { Section } from '@/components/section';
 import { formatTime } from '@/lib/dates';
 import { quantity } from '@/lib/units';
+import { useMediaQuery } from '@/lib/use-media-query';
 import type { AgendaItem, Meeting } from '../api/get-meeting';
 import styles from './run.module.css';
 
@@ -15,6 +16,7 @@ interface OrderPanelProps {
 /** The running order as it was planned, with the clock's place in it; pressing a case takes it up. */
 export function OrderPanel({ meeting, current, now, choose }: OrderPanelProps) {
   const { items, startsAt, minutes } = meeting;
+  const isNarrow = useMediaQuery('(max-width: 640px)');
   const start = Date.parse(startsAt);
   return (
     <Section title="Running order">
@@ -23,7 +25,7 @@ export function OrderPanel({ meeting, current, now, choose }: OrderPanelProps) {
         slots={items}
         startsAt={startsAt}
         minutes={minutes}
-        neededPx={48}
+        neededPx={isNarrow ? 72 : 60}
         now={(now - start) / 60_000}
         currentId={current?.id}
         isDone={({ state }) => state !== 'listed'}

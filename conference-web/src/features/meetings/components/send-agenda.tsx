@@ -33,7 +33,7 @@ export function SendAgenda({ meeting, isDirty }: { meeting: Meeting; isDirty: bo
         onConfirm={send}
         trigger={<Button disabled={isDirty || isUnchanged}>{agendaSentAt ? 'Send agenda again' : 'Send agenda'}</Button>}
       >
-        {`The agenda with ${counted(items.length, 'case')} goes by e-mail to ${members === undefined ? 'all members' : `the ${counted(members, 'member')}`} of ${conferenceName}, with an entry for their calendars. `}
+        {`The agenda ${items.length > 0 ? `with ${counted(items.length, 'case')}` : 'without a case'} goes by e-mail to ${members === undefined ? 'all members' : `the ${counted(members, 'member')}`} of ${conferenceName}, with an entry for their calendars. `}
         {'It holds case codes, minutes, presenters and a link; no clinical detail.'}
       </Confirm>
       {isDirty && <p className="label-text">Save the agenda first.</p>}
