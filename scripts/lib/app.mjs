@@ -1,5 +1,6 @@
 import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { withDrawnImages } from './drawn-images.mjs';
 import { answers } from './http.mjs';
 import { createMailServer, createObjectStore, nodeService } from './fakes.mjs';
 import { createMariaDB } from './mariadb.mjs';
@@ -77,7 +78,8 @@ export async function runMigrations(root, env) {
 
 /** Fills an empty database with the demo; the program itself leaves any other one alone. */
 export async function runSeed(root, env) {
-  await runApiProgram(root, env, 'dist/database/seeds/main.js', 'The demo could not be written.');
+  const seed = () => runApiProgram(root, env, 'dist/database/seeds/main.js', 'The demo could not be written.');
+  await withDrawnImages(root, env.KERFSIDE_DATA, seed);
 }
 
 async function runApiProgram(root, env, program, failure) {

@@ -25,6 +25,13 @@ export function sourceHash(root, { workspace, also = [] }) {
   return hash.digest('hex');
 }
 
+/** A hash of files and folders by their names and contents, tests left out. */
+export function hashOf(root, paths) {
+  const hash = createHash('sha256');
+  for (const path of paths) addToHash(hash, root, path);
+  return hash.digest('hex');
+}
+
 function addToHash(hash, root, path, alsoIgnored = new Set()) {
   const full = join(root, path);
   if (!existsSync(full)) return;
@@ -33,7 +40,7 @@ function addToHash(hash, root, path, alsoIgnored = new Set()) {
     return;
   }
   for (const name of readdirSync(full).sort()) {
-    if (IGNORED.has(name) || alsoIgnored.has(name) || /[.-]spec\.tsx?$/.test(name)) continue;
+    if (IGNORED.has(name) || alsoIgnored.has(name) || /[.-]spec\.(tsx?|mjs)$/.test(name)) continue;
     addToHash(hash, root, `${path}/${name}`);
   }
 }

@@ -2,7 +2,7 @@ import { existsSync, mkdirSync, rmSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 
 const MARK = 'first-start-unfinished';
-const MADE_BY_IT = ['mariadb', 'objects', 'mail'];
+const MADE_BY_IT = ['mariadb', 'objects', 'mail', 'demo-images'];
 
 /**
  * The first start makes the database, runs all migrations and writes the demo. Interrupted in the middle

@@ -1,6 +1,7 @@
 import { existsSync, mkdirSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import { withDrawnImages } from './drawn-images.mjs';
 import { createFirstStart } from './first-start.mjs';
 
 let dataDir;
@@ -41,5 +42,30 @@ describe('the first start', () => {
     expect(createFirstStart(dataDir).isUnderWay).toBe(false);
     expect(createFirstStart(dataDir).begin()).toBe(false);
     expect(readFileSync(table(), 'utf8')).toBe('rows');
+  });
+});
+
+describe('drawn pictures', () => {
+  const draw = (folder, text) => async () => {
+    mkdirSync(join(folder, 'demo-images'), { recursive: true });
+    if (!existsSync(join(folder, 'demo-images/a.png'))) writeFileSync(join(folder, 'demo-images/a.png'), text);
+  };
+  const seen = (folder) => readFileSync(join(folder, 'demo-images/a.png'), 'utf8');
+
+  it('are drawn again only when the drawing program changes, or when drawing was cut short', async () => {
+    const root = join(dataDir, 'checkout');
+    mkdirSync(join(root, 'scripts/phantom'), { recursive: true });
+    writeFileSync(join(root, 'scripts/phantom/main.mjs'), 'first');
+    const folders = ['one', 'two', 'three', 'four'].map((name) => join(dataDir, name));
+    const failing = async () => {
+      await draw(folders[0], 'half')();
+      throw new Error('cut short');
+    };
+    await expect(withDrawnImages(root, folders[0], failing)).rejects.toThrow('cut short');
+    await withDrawnImages(root, folders[1], draw(folders[1], 'whole'));
+    await withDrawnImages(root, folders[2], draw(folders[2], 'not needed'));
+    writeFileSync(join(root, 'scripts/phantom/main.mjs'), 'second');
+    await withDrawnImages(root, folders[3], draw(folders[3], 'other'));
+    expect(folders.slice(1).map(seen)).toEqual(['whole', 'whole', 'other']);
   });
 });
