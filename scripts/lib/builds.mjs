@@ -8,7 +8,7 @@ import { runCommand } from './processes.mjs';
 export const BUILDS = [
   { workspace: 'object-store-fake', product: 'dist/main.js' },
   { workspace: 'mail-fake', product: 'dist/main.js' },
-  { workspace: 'conference-api', product: 'dist/main.js', also: ['scripts/phantom'] },
+  { workspace: 'conference-api', product: 'dist/main.js' },
   // The web computes live figures with the API's own functions and takes its types from the API's description.
   { workspace: 'conference-web', product: 'dist/index.html', also: ['conference-api/src/calc', 'conference-api/openapi.json'] },
 ];

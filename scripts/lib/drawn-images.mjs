@@ -10,8 +10,10 @@ export async function withDrawnImages(root, dataDir, seed) {
   const kept = join(root, 'node_modules/.cache/kerfside', `demo-images-${hashOf(root, ['scripts/phantom']).slice(0, 16)}`);
   const place = join(dataDir, 'demo-images');
   if (existsSync(kept) && !existsSync(place)) cpSync(kept, place, { recursive: true });
+  // Those that are there already may be of an earlier drawing program.
+  const drawnNow = !existsSync(place);
   await seed();
-  if (existsSync(place) && !existsSync(kept)) keep(place, kept);
+  if (drawnNow && existsSync(place)) keep(place, kept);
 }
 
 /** Copied beside its place first: an interrupted copy is never taken for the whole. */
