@@ -1,9 +1,11 @@
 import { Injectable } from '@nestjs/common';
-import sharp, { type Sharp } from 'sharp';
+import sharp, { type OutputInfo, type Sharp } from 'sharp';
 import type { ImageSize } from '../calc/vocabulary/images.js';
 import { Problem } from '../common/problems/problem.js';
-import { renderDicom, unreadable } from './dicom-renderer.js';
+import { DicomRenderer, type PlainPixels } from './dicom-renderer.service.js';
 import { imageKind, type ImageKind } from './image-kind.js';
+import { MOST_PIXELS } from './pixel-limit.js';
+import { unreadable } from './unreadable.js';
 
 export interface ProcessedImage {
   kind: ImageKind;
@@ -13,13 +15,17 @@ export interface ProcessedImage {
   files: Record<ImageSize, { bytes: Buffer; contentType: string }>;
 }
 
-const MOST_PIXELS = 60_000_000;
 const VIEW_EDGE = 1600;
 const THUMB_EDGE = 400;
-/** Pictures decoded at once: each may need some 240 MB, so memory stays under 600 MB. */
+/** Pictures decoded at once: each may need some 400 MB at 60 million pixels, so memory stays under 1 GB. */
 const AT_ONCE = 2;
-/** Uploads that may wait for their turn; each holds its file in memory. */
+/** Those that may wait for their turn. */
 const MOST_WAITING = 40;
+
+// nothing of a picture stays in a cache, and no decoder is at hand but those for the kinds that are taken
+sharp.cache(false);
+sharp.block({ operation: ['VipsForeignLoad'] });
+sharp.unblock({ operation: ['VipsForeignLoadJpegBuffer', 'VipsForeignLoadPngBuffer', 'VipsForeignLoadWebpBuffer', 'VipsForeignLoadTiffBuffer'] });
 
 /** Decodes a picture and writes it anew in three sizes, so that only its pixels are left. */
 @Injectable()
@@ -27,40 +33,48 @@ export class ImageProcessor {
   private running = 0;
   private readonly waiting: (() => void)[] = [];
 
+  constructor(private readonly dicom: DicomRenderer) {}
+
   async process(bytes: Buffer): Promise<ProcessedImage> {
     const kind = await imageKind(bytes);
     return this.inTurn(async () => {
-      const { pixels, pixelSpacingMm } = kind === 'dicom' ? await this.fromDicom(bytes) : await this.fromPicture(bytes);
-      const { data, info } = pixels;
-      const raw = () => sharp(data, { raw: { width: info.width, height: info.height, channels: info.channels as 1 | 3 | 4 }, limitInputPixels: MOST_PIXELS });
-      return {
-        kind,
-        width: info.width,
-        height: info.height,
-        pixelSpacingMm,
-        files: {
-          full: { bytes: await raw().webp({ lossless: true, effort: 1 }).toBuffer(), contentType: 'image/webp' },
-          view: { bytes: await fitted(raw(), VIEW_EDGE).webp({ quality: 85 }).toBuffer(), contentType: 'image/webp' },
-          thumb: { bytes: await fitted(raw(), THUMB_EDGE).webp({ quality: 80 }).toBuffer(), contentType: 'image/webp' },
-        },
-      };
+      const pixels = kind === 'dicom' ? await this.dicom.render(bytes) : await this.decode(bytes);
+      const { width, height, pixelSpacingMm } = pixels;
+      return { kind, width, height, pixelSpacingMm, files: await this.encode(pixels) };
     });
   }
 
-  private async fromDicom(bytes: Buffer) {
-    const { rgba, width, height, pixelSpacingMm } = await renderDicom(bytes);
-    const pixels = await sharp(rgba, { raw: { width, height, channels: 4 } }).removeAlpha().raw().toBuffer({ resolveWithObject: true });
-    return { pixels, pixelSpacingMm };
+  /** Lossless where it is measured on; PNG, since lossless WebP takes ten times as long for a radiograph. */
+  private async encode({ data, width, height, channels }: PlainPixels): Promise<ProcessedImage['files']> {
+    const picture = () => sharp(data, { raw: { width, height, channels }, limitInputPixels: MOST_PIXELS });
+    const [full, view, thumb] = await Promise.all([
+      picture().png({ compressionLevel: 3, adaptiveFiltering: true }).toBuffer(),
+      fitted(picture(), VIEW_EDGE).webp({ quality: 85, effort: 2 }).toBuffer(),
+      fitted(picture(), THUMB_EDGE).webp({ quality: 80 }).toBuffer(),
+    ]);
+    return {
+      full: { bytes: full, contentType: 'image/png' },
+      view: { bytes: view, contentType: 'image/webp' },
+      thumb: { bytes: thumb, contentType: 'image/webp' },
+    };
   }
 
-  private async fromPicture(bytes: Buffer) {
+  private async decode(bytes: Buffer): Promise<PlainPixels> {
     try {
-      const input = sharp(bytes, { limitInputPixels: MOST_PIXELS, failOn: 'truncated', pages: 1, sequentialRead: true });
-      const { width, height } = await input.metadata();
+      const input = sharp(bytes, { limitInputPixels: MOST_PIXELS, failOn: 'error', pages: 1 });
+      const { width, height, space, format, pages = 1 } = await input.metadata();
       if (width * height > MOST_PIXELS) throw tooManyPixels();
+      if (pages > 1 && format === 'tiff')
+        throw unreadable(`The file holds ${pages} pictures; export the one that is needed as a single picture.`);
+      const grey = space === 'b-w' || space === 'grey16';
       // a palette or 16 bits become plain 8-bit pixels; the alpha goes on white paper
-      const pixels = await input.rotate().flatten({ background: '#ffffff' }).toColourspace('srgb').raw().toBuffer({ resolveWithObject: true });
-      return { pixels, pixelSpacingMm: null };
+      const { data, info } = await input
+        .rotate()
+        .flatten({ background: '#ffffff' })
+        .toColourspace(grey ? 'b-w' : 'srgb')
+        .raw()
+        .toBuffer({ resolveWithObject: true });
+      return { data, ...sizeOf(info), pixelSpacingMm: null };
     } catch (error) {
       if (error instanceof Problem) throw error;
       if (error instanceof Error && /pixel limit/i.test(error.message)) throw tooManyPixels();
@@ -85,5 +99,7 @@ export class ImageProcessor {
 }
 
 const fitted = (picture: Sharp, edge: number) => picture.resize(edge, edge, { fit: 'inside', withoutEnlargement: true });
+
+const sizeOf = ({ width, height, channels }: OutputInfo) => ({ width, height, channels: channels === 1 ? (1 as const) : (3 as const) });
 
 const tooManyPixels = () => unreadable('The picture has more than 60 million pixels. Export it smaller.');

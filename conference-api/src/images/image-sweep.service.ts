@@ -32,9 +32,15 @@ export class ImageSweepService {
   private async abandoned(now: Date): Promise<number> {
     const before = new Date(now.getTime() - STORING_MINUTES * 60_000);
     const rows = await this.dataSource.manager.find(CaseImage, { where: { state: 'storing', createdAt: LessThan(before) }, take: 500 });
-    await this.storage.delete(rows.flatMap((row) => imageKeys(row.id)));
-    if (rows.length) await this.dataSource.manager.delete(CaseImage, { id: In(rows.map((row) => row.id)), state: 'storing' });
-    return rows.length;
+    let count = 0;
+    for (const { id } of rows) {
+      // the row first: one that turns ready at this very moment keeps its files
+      const { affected } = await this.dataSource.manager.delete(CaseImage, { id, state: 'storing' });
+      if (!affected) continue;
+      await this.storage.delete(imageKeys(id));
+      count++;
+    }
+    return count;
   }
 
   /** Pictures of withdrawn cases whose time of retention is over. */
@@ -48,8 +54,8 @@ export class ImageSweepService {
       .getMany();
     for (const row of rows) {
       await this.work.run(null, async (tx) => {
-        await tx.manager.update(CaseImage, { id: row.id }, { state: 'removed' });
-        await tx.audit({ action: 'image.retire', recordKind: 'image', recordId: row.id, caseId: row.caseId });
+        const { affected } = await tx.manager.update(CaseImage, { id: row.id, state: 'ready' }, { state: 'removed' });
+        if (affected) await tx.audit({ action: 'image.retire', recordKind: 'image', recordId: row.id, caseId: row.caseId });
       });
     }
     await this.storage.delete(rows.flatMap((row) => imageKeys(row.id)));

@@ -10,6 +10,7 @@ import { SignedAddressDto } from './dto/signed-address.dto.js';
 import { ImageDto, ImageListDto, UpdateImageDto, UploadImageDto } from './dto/image.dto.js';
 import { ImageFilesService } from './image-files.service.js';
 import { ImagesService } from './images.service.js';
+import { UploadGate } from './upload-gate.interceptor.js';
 
 @ApiTags('images')
 @Controller()
@@ -28,7 +29,7 @@ export class ImagesController {
   /** One file; its kind is decided by its content, its metadata are dropped. */
   @Post('cases/:caseId/images')
   @RequirePermission(Permission.ImageWrite)
-  @UseInterceptors(FileInterceptor('file'))
+  @UseInterceptors(UploadGate, FileInterceptor('file'))
   @ApiConsumes('multipart/form-data')
   @ApiBody({
     schema: {

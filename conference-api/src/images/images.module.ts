@@ -2,6 +2,7 @@ import { Module } from '@nestjs/common';
 import { MulterModule } from '@nestjs/platform-express';
 import { memoryStorage } from 'multer';
 import { Settings } from '../config/settings.js';
+import { DicomRenderer } from './dicom-renderer.service.js';
 import { ImageAddresses } from './image-addresses.js';
 import { ImageFilesService } from './image-files.service.js';
 import { ImageProcessor } from './image-processor.service.js';
@@ -21,7 +22,7 @@ import { ImagesService } from './images.service.js';
     }),
   ],
   controllers: [ImagesController],
-  providers: [ImagesService, ImageFilesService, ImageProcessor, ImageAddresses, ImageSweepService],
+  providers: [ImagesService, ImageFilesService, ImageProcessor, DicomRenderer, ImageAddresses, ImageSweepService],
   exports: [ImagesService, ImageSweepService],
 })
 export class ImagesModule {}

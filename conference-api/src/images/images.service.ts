@@ -6,7 +6,7 @@ import type { Actor } from '../access/actor.js';
 import { Permission } from '../access/permission.js';
 import type { Stage } from '../calc/vocabulary/case.js';
 import type { Case } from '../cases/entities/case.entity.js';
-import { invalid, notFound, Problem } from '../common/problems/problem.js';
+import { invalid, notFound, Problem, unavailable } from '../common/problems/problem.js';
 import { UnitOfWork } from '../database/unit-of-work.js';
 import { StorageService } from '../storage/storage.service.js';
 import type { ImageDto, ImageListDto, UpdateImageDto, UploadImageDto } from './dto/image.dto.js';
@@ -41,6 +41,11 @@ export class ImagesService {
     return images.map((image) => this.toDto(image));
   }
 
+  /** Asked before the bytes of an upload are taken in. */
+  async assertMayUpload(actor: Actor, caseId: string): Promise<void> {
+    await this.access.case(actor, Permission.ImageWrite, caseId, { stages: STAGES_FOR_IMAGES });
+  }
+
   async upload(actor: Actor, caseId: string, file: Express.Multer.File | undefined, body: UploadImageDto): Promise<ImageDto> {
     const found = await this.access.case(actor, Permission.ImageWrite, caseId, { stages: STAGES_FOR_IMAGES });
     if (!file) throw invalid('file', 'missing', 'Send one picture in the field file.');
@@ -58,9 +63,9 @@ export class ImagesService {
   }
 
   async update(actor: Actor, id: string, body: UpdateImageDto): Promise<ImageDto> {
-    refuseIdentifiers(body);
     return this.work.run(actor, async (tx) => {
       const image = await this.ofWritableCase(actor, id, tx.manager);
+      refuseIdentifiers(body);
       const changes = Object.fromEntries(Object.entries(body).filter(([, value]) => value !== undefined && value !== null));
       if (Object.keys(changes).length) await tx.manager.update(CaseImage, { id }, changes);
       await tx.audit({ action: 'image.update', recordKind: 'image', recordId: id, caseId: image.caseId, details: { fields: Object.keys(changes) } });
@@ -81,16 +86,27 @@ export class ImagesService {
   }
 
   private async ofWritableCase(actor: Actor, id: string, manager: DataSource['manager']): Promise<CaseImage> {
-    const image = await manager.findOne(CaseImage, { where: { id, state: 'ready' } });
+    const { caseId } = (await manager.findOneBy(CaseImage, { id })) ?? {};
+    if (!caseId) throw notFound('picture');
+    const found = await this.lockedCase(actor, caseId, manager).catch((error: unknown) => {
+      // in the same words as where there is no such picture
+      throw error instanceof Problem && error.code === 'not-found' ? notFound('picture') : error;
+    });
+    // only now, with the case locked: another request may just have removed it
+    const image = await manager.findOneBy(CaseImage, { id, state: 'ready' });
     if (!image) throw notFound('picture');
-    image.case = await this.access.case(actor, Permission.ImageWrite, image.caseId, { stages: STAGES_FOR_IMAGES, manager, lock: true });
+    image.case = found;
     return image;
+  }
+
+  private lockedCase(actor: Actor, caseId: string, manager: DataSource['manager']): Promise<Case> {
+    return this.access.case(actor, Permission.ImageWrite, caseId, { stages: STAGES_FOR_IMAGES, manager, lock: true });
   }
 
   /** The row comes first: what has a row and no files is found by the sweep, and so are files without a row. */
   private reserve(actor: Actor, found: Case, processed: ProcessedImage, sourceHash: string, body: UploadImageDto): Promise<CaseImage> {
     return this.work.run(actor, async (tx) => {
-      await this.access.case(actor, Permission.ImageWrite, found.id, { stages: STAGES_FOR_IMAGES, manager: tx.manager, lock: true });
+      await this.lockedCase(actor, found.id, tx.manager);
       const there = await tx.manager.find(CaseImage, { where: [{ caseId: found.id, state: 'ready' }, { caseId: found.id, state: 'storing' }] });
       if (there.length >= MOST_IMAGES) throw invalid('file', 'too-many', `A case holds at most ${MOST_IMAGES} pictures. Remove one first.`);
       if (there.some((image) => image.sourceHash === sourceHash)) throw new Problem('conflict', 'This very file is in the case already.');
@@ -116,8 +132,10 @@ export class ImagesService {
 
   private makeReady(actor: Actor, image: CaseImage): Promise<ImageDto> {
     return this.work.run(actor, async (tx) => {
-      const found = await this.access.case(actor, Permission.ImageWrite, image.caseId, { stages: STAGES_FOR_IMAGES, manager: tx.manager, lock: true });
-      await tx.manager.update(CaseImage, { id: image.id }, { state: 'ready' });
+      const found = await this.lockedCase(actor, image.caseId, tx.manager);
+      const { affected } = await tx.manager.update(CaseImage, { id: image.id, state: 'storing' }, { state: 'ready' });
+      // storing took so long that the sweep took it for abandoned
+      if (!affected) throw unavailable('object store');
       await tx.audit({ action: 'image.upload', recordKind: 'image', recordId: image.id, caseId: found.id, conferenceId: found.conferenceId, details: { kind: image.sourceKind } });
       await tx.event({ kind: 'images-changed', conferenceId: found.conferenceId, caseId: found.id });
       return this.toDto({ ...image, state: 'ready' });
@@ -125,10 +143,13 @@ export class ImagesService {
   }
 
   private async undo(image: CaseImage): Promise<void> {
-    // the row first, whatever the store says: with it there the same file could not be sent again.
-    // Each is tried for itself; the sweep takes what is left, a row without files or files without a row.
-    await this.dataSource.manager.delete(CaseImage, { id: image.id, state: 'storing' }).catch(() => undefined);
-    await this.storage.delete(imageKeys(image.id)).catch(() => undefined);
+    try {
+      // the row first: where it turned ready after all, though the answer got lost, its files must stay
+      const { affected } = await this.dataSource.manager.delete(CaseImage, { id: image.id, state: 'storing' });
+      if (affected) await this.storage.delete(imageKeys(image.id));
+    } catch {
+      // the sweep takes what is left: rows that stay in storing, and files without a row
+    }
   }
 
   private toDto(image: CaseImage): ImageDto {

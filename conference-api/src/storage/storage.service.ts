@@ -7,7 +7,7 @@ import {
   S3Client,
   S3ServiceException,
 } from '@aws-sdk/client-s3';
-import { Injectable, type OnApplicationShutdown } from '@nestjs/common';
+import { Injectable, Logger, type OnApplicationShutdown } from '@nestjs/common';
 import type { Readable } from 'node:stream';
 import { notFound, unavailable } from '../common/problems/problem.js';
 import { Settings } from '../config/settings.js';
@@ -22,6 +22,7 @@ export interface StoredObject {
 /** The object store, by S3's protocol. Whatever goes wrong with it is one problem: 503. */
 @Injectable()
 export class StorageService implements OnApplicationShutdown {
+  private readonly logger = new Logger(StorageService.name);
   private readonly client: S3Client;
   private readonly bucket: string;
 
@@ -34,7 +35,8 @@ export class StorageService implements OnApplicationShutdown {
       forcePathStyle: true,
       credentials: { accessKeyId, secretAccessKey },
       maxAttempts: 2,
-      requestHandler: { connectionTimeout: 2000, requestTimeout: 15000 },
+      // without throwOnRequestTimeout the client would only warn, and wait on
+      requestHandler: { connectionTimeout: 2000, requestTimeout: 15000, throwOnRequestTimeout: true, socketTimeout: 15000 },
     });
   }
 
@@ -44,7 +46,8 @@ export class StorageService implements OnApplicationShutdown {
 
   /** Problem 404 where the object is not there. */
   async get(key: string): Promise<StoredObject> {
-    const found = await this.ask(() => this.client.send(new GetObjectCommand({ Bucket: this.bucket, Key: key })));
+    const found = await this.ask(() => this.client.send(new GetObjectCommand({ Bucket: this.bucket, Key: key })).catch(unlessMissing));
+    if (!found) throw notFound('picture');
     return {
       body: found.Body as Readable,
       contentType: found.ContentType ?? 'application/octet-stream',
@@ -87,8 +90,14 @@ export class StorageService implements OnApplicationShutdown {
     try {
       return await call();
     } catch (error) {
-      if (error instanceof S3ServiceException && ['NoSuchKey', 'NotFound'].includes(error.name)) throw notFound('picture');
+      // its name only: what the store says may hold keys and addresses
+      this.logger.warn(`the object store failed: ${error instanceof Error ? error.name : typeof error}`);
       throw unavailable('object store');
     }
   }
 }
+
+const unlessMissing = (error: unknown): undefined => {
+  if (error instanceof S3ServiceException && ['NoSuchKey', 'NotFound'].includes(error.name)) return undefined;
+  throw error;
+};
