@@ -1,3 +1,4 @@
+import { useRef } from 'react';
 import type { Schemas } from '@/lib/api/types';
 import { DecisionPanel } from '@/features/decisions/components/decision-panel';
 import { RatingPanel } from '@/features/ratings/components/rating-panel';
@@ -9,22 +10,26 @@ import { ImplantsSection } from './sheet/implants-section';
 import { InfectionSection } from './sheet/infection-section';
 import { OptionsSection } from './sheet/options-section';
 import { PlanSection } from './sheet/plan-section';
+import { RATINGS_ID } from './sheet/sheet-actions';
 import { SheetHead } from './sheet/sheet-head';
 import { SheetCase, SheetRow } from './sheet/sheet-row';
 import { HistorySection, PatientSection, QuestionSection } from './sheet/text-sections';
+import { useMarginFlow } from './sheet/use-margin-flow';
 import styles from './sheet/sheet.module.css';
 
 const DISCUSSED = ['open', 'listed', 'decided', 'final', 'reported', 'withdrawn'];
 
 /** The case as one text, with the margin beside it. */
 export function CaseSheet({ found }: { found: Schemas['CaseDto'] }) {
+  const sheet = useRef<HTMLDivElement>(null);
+  useMarginFlow(sheet);
   const { heading, patient, history, implants, infection, bone, plan, options } = contentOf(found);
   const isHip = heading.joint !== 'knee';
   const side = heading.side ?? null;
   const isDiscussed = DISCUSSED.includes(found.stage) && found.releasedAt !== null;
   return (
     <SheetCase value={isDiscussed ? found.id : null}>
-      <div className={styles.page} data-alone={isDiscussed ? undefined : ''}>
+      <div ref={sheet} className={styles.page} data-alone={isDiscussed ? undefined : ''}>
         <SheetRow anchorKind="case">
           <SheetHead found={found} />
           {found.returnRemark && (
@@ -51,7 +56,7 @@ export function CaseSheet({ found }: { found: Schemas['CaseDto'] }) {
         <PlanSection {...{ plan, implants, side, isHip }} />
         <OptionsSection options={options} />
         {isDiscussed && (
-          <div className={styles.panels}>
+          <div id={RATINGS_ID} className={styles.panels}>
             <RatingPanel caseId={found.id} />
             <DecisionPanel caseId={found.id} />
           </div>

@@ -67,7 +67,7 @@ export function EditCase({ found }: { found: Schemas['CaseDto'] }) {
                   />
                 </>
               ) : (
-                <EditImages found={found} />
+                <EditImages caseId={found.id} />
               )}
             </EditSection>
           ))}

@@ -1,12 +1,4 @@
-import type { Schemas } from '@/lib/api/types';
-import { ImageStrip } from '../image-strip';
+import { ImageUpload } from '@/features/images/components/image-upload';
 
-/** The images of a case while it is written. */
-export function EditImages({ found }: { found: Schemas['CaseDto'] }) {
-  return (
-    <>
-      {/* The upload and the list's editing come from features/images: <ImageUpload caseId={found.id} /> stands here. */}
-      <ImageStrip caseId={found.id} images={found.images} />
-    </>
-  );
-}
+/** The images of a case while it is written: put in, described, ordered, taken out. */
+export const EditImages = ({ caseId }: { caseId: string }) => <ImageUpload caseId={caseId} />;

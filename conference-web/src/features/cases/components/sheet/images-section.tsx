@@ -1,5 +1,5 @@
 import type { Schemas } from '@/lib/api/types';
-import { CasePicture, imageWords } from '../image-strip';
+import { CasePicture, imageWords } from '../case-picture';
 import { NotKnown } from './known';
 import { SheetRow, SheetSection } from './sheet-row';
 

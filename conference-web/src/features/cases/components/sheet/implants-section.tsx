@@ -8,6 +8,8 @@ import styles from './sheet.module.css';
 
 const PART_WORDS = FIELD_WORDS.implants['parts'];
 const words = PART_WORDS?.kind === 'list' ? PART_WORDS.item.fields : {};
+// 'unknown' is an answer that people type
+const named = (text: string | undefined) => (text && !/^\s*(unknown|not known)\s*$/i.test(text) ? text : null);
 const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
 
 export function ImplantsSection({ implants }: Pick<CaseContent, 'implants'>) {
@@ -47,7 +49,8 @@ function Part({ part }: { part: ImplantPart }) {
         <div>
           <dt>Maker and model</dt>
           <dd>
-            {part.maker || <NotKnown>maker not known</NotKnown>}, {part.model || <NotKnown>model not known</NotKnown>} (<Ground part={part} />)
+            {named(part.maker) ?? <NotKnown>maker not known</NotKnown>}, {named(part.model) ?? <NotKnown>model not known</NotKnown>}
+            {' '}(<Ground part={part} />)
           </dd>
         </div>
         {facts.map(([name, value]) => (

@@ -33,7 +33,7 @@ export function InfectionSection({ infection }: Pick<CaseContent, 'infection'>) 
         Suspicion of infection: {known('suspicion')}. Timing: {known('timing')}. Samples taken: {known('sampling')}.
       </p>
       <table className={styles.table}>
-        <caption>Values</caption>
+        <caption className="visually-hidden">Values</caption>
         <thead>
           <tr>
             <th scope="col">Value</th>
@@ -47,14 +47,16 @@ export function InfectionSection({ infection }: Pick<CaseContent, 'infection'>) 
               <td>{saysNothing(infection[name]) ? <NotKnown /> : quantity(infection[name] as number, unit)}</td>
             </tr>
           ))}
-          {FINDINGS.map((name) => (
-            <tr key={name}>
-              <th scope="row">{FIELD_WORDS.infection[name]?.label}</th>
-              <td>{known(name)}</td>
-            </tr>
-          ))}
         </tbody>
       </table>
+      <dl className={styles.facts}>
+        {FINDINGS.map((name) => (
+          <div key={name}>
+            <dt>{FIELD_WORDS.infection[name]?.label}</dt>
+            <dd className="tabular">{known(name)}</dd>
+          </div>
+        ))}
+      </dl>
       <Cultures cultures={infection.cultures ?? []} />
       {!saysNothing(infection.histology) && <Line name="Histology">{infection.histology}</Line>}
       <InfectionFigure infection={infection} />

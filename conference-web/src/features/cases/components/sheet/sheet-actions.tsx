@@ -9,6 +9,9 @@ import { PostDialog } from '../post-dialog';
 
 type Found = Schemas['CaseDto'];
 
+/** Where the options are rated, on the same page. */
+export const RATINGS_ID = 'ratings';
+
 /** What the reader can do with the case now; each button says what happens. */
 export function SheetActions({ found }: { found: Found }) {
   const { actions } = found;
@@ -21,6 +24,11 @@ export function SheetActions({ found }: { found: Found }) {
   return (
     <>
       {actions.check && <CheckActions found={found} />}
+      {actions.rate && (
+        <Button asChild variant="soft">
+          <a href={`#${RATINGS_ID}`}>Rate options</a>
+        </Button>
+      )}
       {actions.edit && (
         <Button asChild variant="soft">
           <Link to={paths.editCase(found.id)}>Edit</Link>

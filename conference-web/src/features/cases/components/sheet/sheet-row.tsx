@@ -21,7 +21,9 @@ export function SheetRow({ anchorKind, anchorRef, about, children }: SheetRowPro
   return (
     <div className={styles.row}>
       <div className={styles.sheet}>{children}</div>
-      <div className={styles.margin}>{caseId && <Margin {...{ caseId, anchorKind, anchorRef, about }} />}</div>
+      <div className={styles.margin} data-margin-slot>
+        <div>{caseId && <Margin {...{ caseId, anchorKind, anchorRef, about }} />}</div>
+      </div>
     </div>
   );
 }

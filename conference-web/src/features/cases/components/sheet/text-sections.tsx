@@ -57,8 +57,9 @@ export function HistorySection({ history }: Pick<CaseContent, 'history'>) {
   return (
     <SheetSection section="history">
       <Line name="Index diagnosis">
-        {known('indexDiagnosis')}; index operation {history.indexInterval ? history.indexInterval : <NotKnown>when, not known</NotKnown>}
+        {known('indexDiagnosis')}
       </Line>
+      <Line name="Since the index operation">{known('indexInterval')}</Line>
       <Line name="Reason for revision">{known('reasons')}</Line>
       {operations.length > 0 ? (
         <>

@@ -2,7 +2,7 @@ import { PROJECTION_WORDS } from '@kerfside/calc/vocabulary/images.js';
 import { Link } from 'react-router-dom';
 import { paths } from '@/app/paths';
 import type { Schemas } from '@/lib/api/types';
-import styles from './image-strip.module.css';
+import styles from './case-picture.module.css';
 
 type Image = Schemas['ImageDto'];
 
@@ -36,16 +36,5 @@ export function CasePicture({ caseId, image, isLarge = false }: PictureProps) {
         {image.caption && <span>{image.caption}</span>}
       </figcaption>
     </figure>
-  );
-}
-
-export function ImageStrip({ caseId, images }: { caseId: string; images: Image[] }) {
-  if (images.length === 0) return <p className="label-text">No images yet.</p>;
-  return (
-    <div className={styles.strip}>
-      {images.map((image) => (
-        <CasePicture key={image.id} caseId={caseId} image={image} />
-      ))}
-    </div>
   );
 }
