@@ -17,6 +17,8 @@ interface RatingRuleProps {
   rounds: RuleRound[];
   /** The own rating, marked below the rule. */
   mine?: number | null;
+  /** Something below it bears the numerals: on a wide screen the rule leaves out its own. */
+  isBare?: boolean;
 }
 
 const FOOT = 40;
@@ -26,11 +28,11 @@ const FOOT = 40;
  * outline and the second filled; the median is a tall tick, lowest to highest a bar. The same stands in a table for
  * those who do not see the drawing.
  */
-export function RatingRule({ title, rounds, mine = null }: RatingRuleProps) {
+export function RatingRule({ title, rounds, mine = null, isBare = false }: RatingRuleProps) {
   const shown = rounds.filter(({ n }) => n > 0);
   const { lanes, ruler } = placeLanes(shown);
   return (
-    <figure className={styles.rule}>
+    <figure className={styles.rule} data-bare={isBare || undefined} data-empty={shown.length === 0 || undefined}>
       <svg viewBox={`0 0 ${WIDTH} ${ruler + FOOT}`} aria-hidden="true" className={styles.drawing}>
         {lanes.map((lane) => (
           <Lane key={lane.round.number} {...lane} />
@@ -103,7 +105,7 @@ function Ruler({ y }: { y: number }) {
   );
 }
 
-function RuleTable({ title, rounds, mine }: Required<RatingRuleProps>) {
+function RuleTable({ title, rounds, mine }: Required<Omit<RatingRuleProps, 'isBare'>>) {
   if (rounds.length === 0)
     return (
       <p>

@@ -1,6 +1,7 @@
 import type { RichText as RichTextContent } from '@kerfside/calc/vocabulary/discussions.js';
 import { Button, Flex } from '@radix-ui/themes';
 import { type FormEvent, type ReactNode, useRef, useState } from 'react';
+import { Confirm } from '@/components/confirm';
 import { Editor } from '@/components/editor/editor';
 import type { Mentionable } from '@/components/editor/editor-props';
 import { FormProblem } from '@/components/form-problem';
@@ -53,7 +54,8 @@ export function Composer({ name, label, sendWord, people, placeholder, initial =
   };
   const submit = (event: FormEvent) => {
     event.preventDefault();
-    void send();
+    // a dialog's form stands elsewhere on the page, but its events pass through here
+    if (event.target === event.currentTarget) void send();
   };
   const discard = () => {
     forget({ content: null, isEmpty: true });
@@ -79,9 +81,25 @@ export function Composer({ name, label, sendWord, people, placeholder, initial =
         </>
       )}
       <Flex gap="2" wrap="wrap" justify="end" mt="2">
-        <Button type="button" variant="ghost" color="gray" className={styles.quiet} onClick={discard}>
-          {draft.isEmpty ? 'Close' : 'Discard'}
-        </Button>
+        {draft.isEmpty ? (
+          <Button type="button" variant="ghost" color="gray" className={styles.quiet} onClick={discard}>
+            Close
+          </Button>
+        ) : (
+          <Confirm
+            title="Discard what you wrote"
+            confirmWord="Discard text"
+            tone="grave"
+            onConfirm={async () => discard()}
+            trigger={
+              <Button type="button" variant="ghost" color="gray" className={styles.quiet}>
+                Discard
+              </Button>
+            }
+          >
+            It has not been sent, and will be gone. To go on later, just leave the page: it is kept in this browser.
+          </Confirm>
+        )}
         <Button type="submit" loading={isBusy} disabled={draft.isEmpty}>
           {error === null ? sendWord : 'Try again'}
         </Button>

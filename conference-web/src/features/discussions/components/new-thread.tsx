@@ -24,17 +24,19 @@ const KIND_WORDS: Record<ThreadKind, string> = { remark: 'Remark', question: 'Qu
 export function NewThread({ caseId, anchor, about, people, mayAsk }: NewThreadProps) {
   const name = `new:${caseId}:${anchor.anchorKind}:${anchor.anchorRef ?? ''}`;
   const [isOpen, setOpen] = useState(useHasKept(`remark:${name}`));
+  const [wasOpened, setWasOpened] = useState(false);
   const kind = useKept<ThreadKind>(`kind:${name}`, 'remark');
   const create = useCreateThread(caseId);
   if (!isOpen)
     return (
-      <Button type="button" variant="ghost" color="gray" className={styles.quiet} onClick={() => setOpen(true)} aria-label={`Write a remark on ${about}`}>
+      <Button type="button" variant="ghost" color="gray" className={styles.quiet} onClick={() => setOpen(true)} autoFocus={wasOpened} aria-label={`Write a remark on ${about}`}>
         <Pencil1Icon aria-hidden="true" />
         Write a remark
       </Button>
     );
   const close = () => {
     kind.forget('remark');
+    setWasOpened(true);
     setOpen(false);
   };
   return (

@@ -57,14 +57,14 @@ export function RatingForm({ caseId, round, rounds, onDone, onCancel }: RatingFo
         {options.map((option) => (
           <li key={option.id}>
             <OptionHead option={option} />
-            <RatingRule title={option.title} rounds={figuresOf(rounds, option.id)} mine={draft.values[option.id] ?? null} />
-            <FigureLines figures={figuresOf(rounds, option.id)} />
+            <RatingRule title={option.title} rounds={figuresOf(rounds, option.id)} mine={draft.values[option.id] ?? null} isBare />
             <RatingScale
               title={option.title}
               value={draft.values[option.id] ?? null}
               onChange={(value) => set({ ...draft, values: { ...draft.values, [option.id]: value } })}
               error={missing.includes(option.id) ? 'Rate this option from 1 to 9.' : undefined}
             />
+            <FigureLines figures={figuresOf(rounds, option.id)} />
           </li>
         ))}
       </ol>
