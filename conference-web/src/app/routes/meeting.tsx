@@ -60,11 +60,6 @@ function EditableAgenda({ meeting }: { meeting: Meeting }) {
   const draft = useAgendaDraft(meeting);
   return (
     <>
-      <div className="print-only">
-        <Section title="Running order">
-          <AgendaView meeting={meeting} />
-        </Section>
-      </div>
       <div className="print-hidden">
         <Section title="Running order">
           <AgendaEditor meeting={meeting} draft={draft} />
@@ -72,6 +67,11 @@ function EditableAgenda({ meeting }: { meeting: Meeting }) {
         </Section>
         <ListableCases meeting={meeting} draft={draft} />
         <SendAgenda meeting={meeting} isDirty={draft.isDirty} />
+      </div>
+      <div className="print-only">
+        <Section title="Running order">
+          <AgendaView meeting={meeting} />
+        </Section>
       </div>
     </>
   );

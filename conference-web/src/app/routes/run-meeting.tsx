@@ -70,6 +70,8 @@ interface ColumnsProps {
 
 function Columns({ meeting, slots, now, isLeading }: ColumnsProps) {
   const { current, clock, choose } = slots;
+  // the coordinator is here for the attendance
+  const isTaking = meeting.actions.writeAttendance && !meeting.actions.run;
   return (
     <div className={styles.columns}>
       {current ? (
@@ -82,9 +84,10 @@ function Columns({ meeting, slots, now, isLeading }: ColumnsProps) {
       ) : (
         <EmptyState title="No case is listed">The agenda of this meeting is empty.</EmptyState>
       )}
-      <div>
+      <div className={isTaking ? styles.first : undefined}>
+        {isTaking && <AttendancePanel meeting={meeting} />}
         {current && <OrderPanel meeting={meeting} current={current} now={now} choose={choose} />}
-        <AttendancePanel meeting={meeting} />
+        {!isTaking && <AttendancePanel meeting={meeting} />}
       </div>
     </div>
   );

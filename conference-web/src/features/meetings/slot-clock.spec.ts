@@ -4,7 +4,7 @@ import { chooseSlot, clockFace, driftWords, EMPTY_CLOCK, forecast, spentOn, star
 const START = Date.parse('2026-12-09T07:30:00Z');
 const minute = (count: number) => START + count * 60_000;
 const item = (id: string, minutes: number, state: 'listed' | 'decided' | 'deferred' = 'listed') => ({ id, minutes, state });
-const meeting = (...items: ReturnType<typeof item>[]) => ({ startsAt: '2026-12-09T07:30:00Z', minutes: 60, items });
+const meeting = (...items: ReturnType<typeof item>[]) => ({ startsAt: '2026-12-09T07:30:00Z', startedAt: null as string | null, minutes: 60, items });
 
 describe('the time of a slot', () => {
   test('runs from when its case is chosen', () => {
@@ -68,6 +68,15 @@ describe('the drift of the running order', () => {
     const clock = chooseSlot(EMPTY_CLOCK, 'a', minute(0), true);
     expect(forecast(meeting(item('a', 40), item('b', 30)), clock, minute(0)).overMinutes).toBeCloseTo(10);
     expect(forecast(meeting(item('a', 40)), clock, minute(0)).overMinutes).toBe(0);
+  });
+
+  test('begins where the meeting did when that was hours away from its planned time', () => {
+    const order = meeting(item('a', 20), item('b', 15));
+    const clock = chooseSlot(EMPTY_CLOCK, 'a', minute(600), true);
+    const later = { ...order, startedAt: new Date(minute(600)).toISOString() };
+    expect(forecast(later, clock, minute(605)).driftMinutes).toBeCloseTo(0);
+    const slightlyLate = { ...order, startedAt: new Date(minute(10)).toISOString() };
+    expect(forecast(slightlyLate, chooseSlot(EMPTY_CLOCK, 'a', minute(10), true), minute(10)).driftMinutes).toBeCloseTo(10);
   });
 
   test.each([[0.4, 'On time'], [-0.4, 'On time'], [3.6, '4 min behind'], [-3.2, '3 min ahead']])('reads %d as %s', (drift, words) => {

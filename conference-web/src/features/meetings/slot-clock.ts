@@ -33,6 +33,13 @@ export const stopClock = (clock: SlotClock, now: number): SlotClock => ({ ...clo
 
 export const startClock = (clock: SlotClock, now: number): SlotClock => (clock.since === null && clock.currentId ? { ...clock, since: now } : clock);
 
+const MOVED_MS = 60 * MINUTE_MS;
+
+/** Where the running order begins: at its planned time, or where the meeting began if it was held at quite another. */
+export function orderStart({ startsAt, startedAt }: { startsAt: string; startedAt: string | null }): string {
+  return startedAt !== null && Math.abs(Date.parse(startedAt) - Date.parse(startsAt)) > MOVED_MS ? startedAt : startsAt;
+}
+
 export interface Forecast {
   /** When the last case ends if each takes its minutes from here. */
   endsAt: Date;
@@ -47,11 +54,11 @@ export interface Forecast {
  * minutes, or nothing once they are used up; the others have theirs.
  * Common practice, no source.
  */
-export function forecast(meeting: { startsAt: string; minutes: number; items: readonly ClockedItem[] }, clock: SlotClock, now: number): Forecast {
+export function forecast(meeting: { startsAt: string; startedAt: string | null; minutes: number; items: readonly ClockedItem[] }, clock: SlotClock, now: number): Forecast {
   const left = meeting.items
     .filter(({ state }) => state === 'listed')
     .reduce((sum, { id, minutes }) => sum + Math.max(0, minutes * MINUTE_MS - spentOn(clock, id, now)), 0);
-  const start = Date.parse(meeting.startsAt);
+  const start = Date.parse(orderStart(meeting));
   const planned = meeting.items.reduce((sum, { minutes }) => sum + minutes, 0);
   const end = now + left;
   return {

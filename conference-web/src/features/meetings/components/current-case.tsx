@@ -33,12 +33,12 @@ export function CurrentCase({ meeting, item, choose, timer }: CurrentCaseProps) 
         <span>{item.code}</span> {item.title}
       </h2>
       <p className={styles.facts}>
-        {[item.side && SIDE_WORDS[item.side], URGENCY_WORDS[item.urgency], STATE_WORDS[item.state]].filter(Boolean).join(', ')}
+        {[item.side && SIDE_WORDS[item.side], URGENCY_WORDS[item.urgency].toLowerCase(), STATE_WORDS[item.state]].filter(Boolean).join(', ')}
         {'. '}
         <PersonLine person={item.presenter} />
       </p>
       {item.deferredReason && <p>Deferred: {item.deferredReason}</p>}
-      {timer}
+      {item.state === 'listed' && timer}
       <Flex gap="3" wrap="wrap" mb="4">
         <Button asChild variant="soft">
           <Link to={paths.case(item.caseId)}>Open the case</Link>

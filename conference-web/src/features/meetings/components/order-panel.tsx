@@ -4,6 +4,7 @@ import { formatTime } from '@/lib/dates';
 import { quantity } from '@/lib/units';
 import { useMediaQuery } from '@/lib/use-media-query';
 import type { AgendaItem, Meeting } from '../api/get-meeting';
+import { orderStart } from '../slot-clock';
 import styles from './run.module.css';
 
 interface OrderPanelProps {
@@ -15,7 +16,8 @@ interface OrderPanelProps {
 
 /** The running order as it was planned, with the clock's place in it; pressing a case takes it up. */
 export function OrderPanel({ meeting, current, now, choose }: OrderPanelProps) {
-  const { items, startsAt, minutes } = meeting;
+  const { items, minutes } = meeting;
+  const startsAt = orderStart(meeting);
   const isNarrow = useMediaQuery('(max-width: 640px)');
   const start = Date.parse(startsAt);
   return (
