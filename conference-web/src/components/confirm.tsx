@@ -24,6 +24,8 @@ export function Confirm({ trigger, title, children, confirmWord, tone = 'plain',
   const [isBusy, setBusy] = useState(false);
   const submit = async (event: FormEvent) => {
     event.preventDefault();
+    // React passes it on to a form around the trigger, which is another form
+    event.stopPropagation();
     setBusy(true);
     setError(null);
     try {

@@ -51,7 +51,9 @@ export function ConferenceSettingsForm({ conference }: { conference: Conference 
         </p>
       )}
       {isAdministrator && (
-        <TextField label="Name" required maxLength={120} error={errors['name']} value={values.name} onChange={({ target }) => set({ name: target.value })} />
+        <div className={styles.single}>
+          <TextField label="Name" required maxLength={120} error={errors['name']} value={values.name} onChange={({ target }) => set({ name: target.value })} />
+        </div>
       )}
       <SlotEditor
         values={values}

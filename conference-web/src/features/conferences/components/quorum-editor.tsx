@@ -19,16 +19,18 @@ export function QuorumEditor({ rule, errors, onChange }: QuorumEditorProps) {
   return (
     <fieldset className={styles.group}>
       <legend>Quorum</legend>
-      <TextField
-        label="Members present who may rate, at least"
-        type="number"
-        min={1}
-        max={100}
-        required
-        error={errors['quorumRule.raters']}
-        value={rule.raters}
-        onChange={({ target }) => onChange({ ...rule, raters: target.valueAsNumber || 0 })}
-      />
+      <div className={styles.single}>
+        <TextField
+          label="Members present who may rate, at least"
+          type="number"
+          min={1}
+          max={100}
+          required
+          error={errors['quorumRule.raters']}
+          value={rule.raters}
+          onChange={({ target }) => onChange({ ...rule, raters: target.valueAsNumber || 0 })}
+        />
+      </div>
       {rule.disciplines.map((row, index) => (
         <div key={row.discipline} className={styles['rule-row']}>
           <SelectField

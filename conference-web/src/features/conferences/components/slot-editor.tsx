@@ -45,8 +45,7 @@ export function SlotEditor({ values, kind, errors, onChange }: SlotEditorProps) 
           onChange={({ target }) => onChange({ timeZone: target.value }, kind)}
         />
         <TextField
-          label="First meeting"
-          hint="By the clocks of the time zone."
+          label="First meeting, local time"
           type="datetime-local"
           required
           error={errors['slotStart']}
@@ -86,7 +85,7 @@ export function SlotEditor({ values, kind, errors, onChange }: SlotEditorProps) 
           onChange={({ target }) => onChange({ agendaHoursBefore: target.valueAsNumber || 0 }, kind)}
         />
       </div>
-      <NextDates slot={{ timeZone: values.timeZone, start: values.slotStart, rrule: values.slotRule }} />
+      {!errors['slotRule'] && <NextDates slot={{ timeZone: values.timeZone, start: values.slotStart, rrule: values.slotRule }} />}
     </fieldset>
   );
 }
