@@ -4,7 +4,7 @@ import { DecisionPanel } from '@/features/decisions/components/decision-panel';
 import { RatingPanel } from '@/features/ratings/components/rating-panel';
 import { contentOf } from '../draft/use-case-draft';
 import { BoneSection } from './sheet/bone-section';
-import { CheckView } from './sheet/check-view';
+import { CheckEnd, CheckView } from './sheet/check-view';
 import { ImagesSection } from './sheet/images-section';
 import { ImplantsSection } from './sheet/implants-section';
 import { InfectionSection } from './sheet/infection-section';
@@ -55,6 +55,7 @@ export function CaseSheet({ found }: { found: Schemas['CaseDto'] }) {
         <ImagesSection caseId={found.id} images={found.images} areLarge={found.stage === 'checking'} />
         <PlanSection {...{ plan, implants, side, isHip }} />
         <OptionsSection options={options} />
+        {found.actions.check && <CheckEnd found={found} />}
         {isDiscussed && (
           <div id={RATINGS_ID} className={styles.panels}>
             <RatingPanel caseId={found.id} />

@@ -10,7 +10,7 @@ const VERDICT_WORDS: Record<Infection2018Verdict, string> = {
   inconclusive: 'inconclusive',
   'not-infected': 'not infected on what is known',
 };
-const words = (name: string) => FIELD_WORDS.infection[name]?.label ?? name;
+const words = (name: string) => (FIELD_WORDS.infection[name]?.label ?? name).replace(/ positive$/, '');
 const NAME = 'Infection score of 2018, consensus version';
 
 /** The infection score as the values stand; computed by the same function as on the server. */
@@ -30,7 +30,7 @@ function Result({ result }: { result: Infection2018Result }) {
   const { totalScore, verdict, majorCriteria, wouldChange } = result;
   const major = majorCriteria.length ? [`Major criteria met: ${majorCriteria.map(words).join(', ')}. One alone decides.`] : [];
   const open = wouldChange.length
-    ? [`Would change this: ${wouldChange.map((change) => `${words(change.field)} (${change.ifItWere}) to ${VERDICT_WORDS[change.verdict]}`).join('; ')}.`]
+    ? [`Would change this: ${wouldChange.map((change) => `${words(change.field)} if ${change.ifItWere} (${VERDICT_WORDS[change.verdict]})`).join('; ')}.`]
     : [];
   return (
     <FigureFrame name={NAME} definition={result.definition} missing={result.missing.map(words)} remarks={[...major, ...open]} cautions={result.cautions}>

@@ -28,3 +28,13 @@ export function CheckView({ found }: { found: Schemas['CaseDto'] }) {
     </section>
   );
 }
+
+/** Where whoever has read to the end decides. */
+export const CheckEnd = ({ found }: { found: Schemas['CaseDto'] }) => (
+  <div className={styles.check}>
+    <strong>End of the sheet</strong>
+    <div className={styles['check-actions']}>
+      <CheckActions found={found} />
+    </div>
+  </div>
+);

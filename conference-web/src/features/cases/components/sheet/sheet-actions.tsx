@@ -23,7 +23,6 @@ export function SheetActions({ found }: { found: Found }) {
   };
   return (
     <>
-      {actions.check && <CheckActions found={found} />}
       {actions.rate && (
         <Button asChild variant="soft">
           <a href={`#${RATINGS_ID}`}>Rate options</a>

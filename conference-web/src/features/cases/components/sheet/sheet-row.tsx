@@ -18,11 +18,12 @@ interface SheetRowProps {
 /** A piece of the sheet, with what colleagues say beside it; on a phone below it. */
 export function SheetRow({ anchorKind, anchorRef, about, children }: SheetRowProps) {
   const caseId = useContext(SheetCase);
+  const name = about ?? (anchorKind === 'section' ? SECTION_WORDS[anchorRef as Section].toLowerCase() : 'the whole case');
   return (
     <div className={styles.row}>
       <div className={styles.sheet}>{children}</div>
       <div className={styles.margin} data-margin-slot>
-        <div>{caseId && <Margin {...{ caseId, anchorKind, anchorRef, about }} />}</div>
+        <div data-about={name}>{caseId && <Margin {...{ caseId, anchorKind, anchorRef, about }} />}</div>
       </div>
     </div>
   );
