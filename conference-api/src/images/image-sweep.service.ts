@@ -5,8 +5,8 @@ import { UnitOfWork } from '../database/unit-of-work.js';
 import { StorageService } from '../storage/storage.service.js';
 import { CaseImage } from './entities/case-image.entity.js';
 import { IMAGE_PREFIX, imageKeys } from './image-keys.js';
+import { storingSince } from './storing.js';
 
-const STORING_MINUTES = 10;
 const DAY = 86_400_000;
 
 export interface SweepResult {
@@ -30,8 +30,7 @@ export class ImageSweepService {
   }
 
   private async abandoned(now: Date): Promise<number> {
-    const before = new Date(now.getTime() - STORING_MINUTES * 60_000);
-    const rows = await this.dataSource.manager.find(CaseImage, { where: { state: 'storing', createdAt: LessThan(before) }, take: 500 });
+    const rows = await this.dataSource.manager.find(CaseImage, { where: { state: 'storing', createdAt: LessThan(storingSince(now)) }, take: 500 });
     let count = 0;
     for (const { id } of rows) {
       // the row first: one that turns ready at this very moment keeps its files
@@ -63,7 +62,7 @@ export class ImageSweepService {
   }
 
   private async orphans(now: Date): Promise<number> {
-    const before = now.getTime() - STORING_MINUTES * 60_000;
+    const before = storingSince(now).getTime();
     let count = 0;
     let batch: string[] = [];
     for await (const { key, modified } of this.storage.list(IMAGE_PREFIX)) {

@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { createHash } from 'node:crypto';
-import { DataSource } from 'typeorm';
+import { DataSource, MoreThan } from 'typeorm';
 import { AccessService } from '../access/access.service.js';
 import type { Actor } from '../access/actor.js';
 import { Permission } from '../access/permission.js';
@@ -14,6 +14,7 @@ import { CaseImage } from './entities/case-image.entity.js';
 import { ImageAddresses } from './image-addresses.js';
 import { imageKey, imageKeys } from './image-keys.js';
 import { ImageProcessor, type ProcessedImage } from './image-processor.service.js';
+import { storingSince } from './storing.js';
 import { refuseIdentifiers } from './refuse-identifiers.js';
 
 const STAGES_FOR_IMAGES: readonly Stage[] = ['draft', 'open', 'listed'];
@@ -107,9 +108,13 @@ export class ImagesService {
   private reserve(actor: Actor, found: Case, processed: ProcessedImage, sourceHash: string, body: UploadImageDto): Promise<CaseImage> {
     return this.work.run(actor, async (tx) => {
       await this.lockedCase(actor, found.id, tx.manager);
-      const there = await tx.manager.find(CaseImage, { where: [{ caseId: found.id, state: 'ready' }, { caseId: found.id, state: 'storing' }] });
+      // what has been storing for longer is the sweep's, and must not keep the same file from being sent again
+      const storing = { caseId: found.id, state: 'storing' as const, createdAt: MoreThan(storingSince(tx.now)) };
+      const there = await tx.manager.find(CaseImage, { where: [{ caseId: found.id, state: 'ready' }, storing] });
       if (there.length >= MOST_IMAGES) throw invalid('file', 'too-many', `A case holds at most ${MOST_IMAGES} pictures. Remove one first.`);
-      if (there.some((image) => image.sourceHash === sourceHash)) throw new Problem('conflict', 'This very file is in the case already.');
+      const same = there.find((image) => image.sourceHash === sourceHash);
+      if (same)
+        throw new Problem('conflict', same.state === 'ready' ? 'This very file is in the case already.' : 'This very file is being stored just now. Look at the case again in a moment.');
       const image = tx.manager.create(CaseImage, {
         caseId: found.id,
         state: 'storing',

@@ -14,9 +14,9 @@ export interface ObjectStore {
 }
 
 /** An object store of the test's own, so that it can fail without another test's noticing. */
-export async function startObjectStore(): Promise<ObjectStore> {
+export async function startObjectStore(limits: { maxObjectBytes?: number } = {}): Promise<ObjectStore> {
   const dataDir = await mkdtemp(join(tmpdir(), 'kerfside-store-'));
-  const options = { dataDir, accessKeyId: 'kerfside', secretAccessKey: 'a-secret-of-this-test', region: 'eu-west-1', buckets: ['kerfside'] };
+  const options = { dataDir, accessKeyId: 'kerfside', secretAccessKey: 'a-secret-of-this-test', region: 'eu-west-1', buckets: ['kerfside'], ...limits };
   let fake: ObjectStoreFake | null = await startObjectStoreFake({ ...options, port: 0 });
   const { port } = fake;
   const stop = async () => {
