@@ -51,7 +51,7 @@ export function RunningOrder<T extends Slot>(props: RunningOrderProps<T>) {
     if (drag?.id === each.slot.id) return { top: drag.top, height };
     return { top: each.fits ? minutesLong(each.from) : `calc(var(--per-minute) * ${each.from + shift} + ${BELOW_PX}px)`, height };
   };
-  const length = { '--per-minute': `${scale}px`, '--print-scale': `${Math.min(2.4, 150 / Math.max(minutes + below, 1))}mm` } as CSSProperties;
+  const length = { '--per-minute': `${scale}px`, '--print-scale': `${Math.min(2, 120 / Math.max(minutes + below, 1))}mm` } as CSSProperties;
   const all = { height: `calc(var(--per-minute) * ${minutes + below} + ${waiting.length ? BELOW_PX : 0}px)` };
   return (
     <div className={styles.order} style={length} data-dragging={drag ? true : undefined}>

@@ -31,7 +31,7 @@ export function ImageFieldsForm({ value, errors = {}, disabled, onChange, onRest
       <TextField
         label="Interval"
         optional
-        placeholder="9 years after the index operation"
+        hint="Such as ‘9 years after the index operation’; never a date."
         maxLength={120}
         error={errors.interval}
         value={value.interval}

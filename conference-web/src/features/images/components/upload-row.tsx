@@ -36,17 +36,17 @@ function RowButtons({ upload: { id, file, state }, queue }: { upload: Upload; qu
   return (
     <div className={styles.buttons}>
       {isMoving && (
-        <Button variant="soft" color="gray" highContrast onClick={() => queue.cancel(id)} aria-label={`Cancel ${file.name}`}>
+        <Button variant="soft" color="gray" highContrast onClick={() => queue.cancel(id)} aria-label={`Cancel: ${file.name}`}>
           Cancel
         </Button>
       )}
       {(state.kind === 'refused' || state.kind === 'cancelled') && (
-        <Button variant="soft" onClick={() => queue.retry(id)} aria-label={`Try ${file.name} again`}>
+        <Button variant="soft" onClick={() => queue.retry(id)} aria-label={`Try again: ${file.name}`}>
           Try again
         </Button>
       )}
       {!isMoving && (
-        <Button variant="soft" color="gray" highContrast onClick={() => queue.remove(id)} aria-label={`Take ${file.name} off this list`}>
+        <Button variant="soft" color="gray" highContrast onClick={() => queue.remove(id)} aria-label={`${state.kind === 'done' ? 'Clear' : 'Leave out'}: ${file.name}`}>
           {state.kind === 'done' ? 'Clear' : 'Leave out'}
         </Button>
       )}
@@ -79,11 +79,11 @@ function Progress({ state, name }: { state: UploadState; name: string }) {
     case 'done':
       return <p className="label-text">Uploaded</p>;
     case 'cancelled':
-      return <p className="label-text">Cancelled: nothing was kept</p>;
+      return <p className="label-text">Cancelled</p>;
     case 'refused':
       return (
         <p className={styles.refused} role="alert">
-          <strong>{name}:</strong> {state.problem.title}. {state.problem.detail}
+          <strong>{name}:</strong> {state.problem.title}. {state.problem.errors.length === 0 && state.problem.detail}
         </p>
       );
   }

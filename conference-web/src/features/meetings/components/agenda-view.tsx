@@ -4,6 +4,7 @@ import { layOutSlots } from '@/components/running-order/running-order-scale';
 import { formatTime, zoneName } from '@/lib/dates';
 import { counted, quantity } from '@/lib/units';
 import { useMediaQuery } from '@/lib/use-media-query';
+import { plannedMinutes } from '../agenda-draft';
 import type { AgendaItem, Meeting } from '../api/get-meeting';
 import { SlotText } from './agenda-slot';
 import styles from './agenda.module.css';
@@ -16,6 +17,12 @@ export function agendaSummary(count: number, planned: number, minutes: number): 
   return `${counted(count, 'case')}, ${planned} of ${quantity(minutes, 'minutes')} planned${end}.`;
 }
 
+/** `4 cases: 1 decided, 3 deferred.` */
+function outcomeSummary(items: AgendaItem[]): string {
+  const decided = items.filter(({ state }) => state === 'decided').length;
+  return `${counted(items.length, 'case')}: ${decided} decided, ${items.length - decided} deferred.`;
+}
+
 /** The agenda to read: the running order, and the same as a table. */
 export function AgendaView({ meeting }: { meeting: Meeting }) {
   const { items, startsAt, minutes } = meeting;
@@ -23,7 +30,7 @@ export function AgendaView({ meeting }: { meeting: Meeting }) {
   if (items.length === 0) return <p className="label-text">No case is listed yet.</p>;
   return (
     <>
-      <p className={styles.summary}>{agendaSummary(items.length, meeting.plannedMinutes, minutes)}</p>
+      <p className={styles.summary}>{meeting.state === 'closed' ? outcomeSummary(items) : agendaSummary(items.length, plannedMinutes(items), minutes)}</p>
       <RunningOrder label="Running order" slots={items} startsAt={startsAt} minutes={minutes} neededPx={isNarrow ? 72 : 46} isDone={({ state }) => state !== 'listed'}>
         {({ slot }) => <SlotText item={slot} minutes={slot.minutes} />}
       </RunningOrder>
