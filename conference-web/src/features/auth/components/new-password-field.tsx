@@ -21,7 +21,7 @@ export function NewPasswordField({ label, value, error, onChange }: NewPasswordF
         label={label}
         hint={
           <>
-            At least {FEWEST} characters; several words with spaces between them do well. No other rule.
+            At least {FEWEST} characters; several words with spaces between them do well. Capitals, digits and signs are not asked for.
             <span className="tabular">{count}</span>
           </>
         }
