@@ -61,7 +61,7 @@ function Standing({ decision, replacedBy, replaces }: ResolutionProps) {
       {replacedByNumber !== null && (
         <p className={styles.notice} role="note">
           <strong>No longer in force.</strong> Replaced by{' '}
-          {replacedBy ? <Link to={paths.decision(replacedBy.id)}>decision {replacedByNumber}</Link> : `decision ${replacedByNumber}`}.
+          {replacedBy ? <Link to={paths.decision(replacedBy.id)}>number {replacedByNumber}</Link> : `number ${replacedByNumber}`}.
         </p>
       )}
       {kind === 'advice' && (
@@ -76,7 +76,7 @@ function Standing({ decision, replacedBy, replaces }: ResolutionProps) {
           {replacesNumber !== null && (
             <>
               {' '}
-              of {replaces ? <Link to={paths.decision(replaces.id)}>decision {replacesNumber}</Link> : `decision ${replacesNumber}`}, which it replaces
+              of {replaces ? <Link to={paths.decision(replaces.id)}>number {replacesNumber}</Link> : `number ${replacesNumber}`}, which it replaces
             </>
           )}
           . Reason: {amendmentReason}

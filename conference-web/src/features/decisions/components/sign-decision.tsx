@@ -62,6 +62,8 @@ function SignForm({ draft, saver, onClose }: { draft: Decision; saver: DraftSave
   const sign = useSignDecision(draft.caseId);
   // a second press must not send a second signature while the first is on its way
   const isSending = useRef(false);
+  const field = useRef<HTMLInputElement>(null);
+  const wrong = fieldMessages(sign.error)['password'];
   const submit = async (event: FormEvent) => {
     event.preventDefault();
     event.stopPropagation();
@@ -73,20 +75,22 @@ function SignForm({ draft, saver, onClose }: { draft: Decision; saver: DraftSave
     } catch {
       // said in the form
       setPassword('');
+      field.current?.focus();
     } finally {
       isSending.current = false;
     }
   };
   return (
     <form onSubmit={(event) => void submit(event)}>
-      <FormProblem error={sign.error} shown={['password']} />
+      {!wrong && <FormProblem error={sign.error} />}
       <input type="hidden" name="username" autoComplete="username" value={me.email} />
       <TextField
         label={`Password of ${me.name}`}
         type="password"
         autoComplete="current-password"
         required
-        error={fieldMessages(sign.error)['password']}
+        error={wrong}
+        ref={field}
         value={password}
         onChange={(event) => setPassword(event.target.value)}
       />
