@@ -12,7 +12,7 @@ import styles from './outcomes.module.css';
 /** What was planned beside what was done, with what differs marked. */
 export function OutcomeView({ found, outcome }: { found: Schemas['CaseDto']; outcome: Outcome }) {
   const { content } = found;
-  const text = (words: string, key: string) => (words ? <span key={key} className={styles.words}>{words}</span> : 'Not known');
+  const text = (words: string, key: string) => (words ? <span key={key} className={styles.words}>{words}</span> : 'Not said');
   return (
     <>
       <p className="label-text">
