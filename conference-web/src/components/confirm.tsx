@@ -64,7 +64,7 @@ export function Confirm({ trigger, title, children, confirmWord, tone = 'plain',
                 Cancel
               </Button>
             </AlertDialog.Cancel>
-            <Button type="submit" color={tone === 'grave' ? 'red' : undefined} loading={isBusy} disabled={reason && !text.trim()}>
+            <Button type="submit" color={tone === 'grave' ? 'red' : undefined} loading={isBusy} disabled={isBusy || (reason && !text.trim())}>
               {confirmWord}
             </Button>
           </Flex>

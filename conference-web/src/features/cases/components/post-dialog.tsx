@@ -87,7 +87,7 @@ function PostForm({ caseId, version, isPreparing, onGoTo }: PostFormProps) {
                   Not yet
                 </Button>
               </Dialog.Close>
-              <Button loading={post.isPending || isPreparing} disabled={!readiness.canBePosted || isNotSaved} onClick={submit}>
+              <Button loading={post.isPending || isPreparing} disabled={post.isPending || isPreparing || !readiness.canBePosted || isNotSaved} onClick={submit}>
                 Post case
               </Button>
             </Flex>

@@ -38,7 +38,7 @@ export function SignDecision({ draft, saver, lacks }: SignDecisionProps) {
           </ul>
         </div>
       )}
-      <Button type="button" size="3" loading={isSaving} disabled={lacks.length > 0} onClick={() => void open()}>
+      <Button type="button" size="3" loading={isSaving} disabled={isSaving || lacks.length > 0} onClick={() => void open()}>
         Sign {draft.kind === 'advice' ? 'advice' : 'decision'}
       </Button>
       <Dialog.Root open={isOpen} onOpenChange={setOpen}>
@@ -98,7 +98,7 @@ function SignForm({ draft, saver, onClose }: { draft: Decision; saver: DraftSave
         <Button type="button" variant="soft" color="gray" onClick={onClose}>
           Cancel
         </Button>
-        <Button type="submit" loading={sign.isPending} disabled={!password}>
+        <Button type="submit" loading={sign.isPending} disabled={sign.isPending || !password}>
           Sign {draft.kind === 'advice' ? 'advice' : 'decision'}
         </Button>
       </Flex>

@@ -100,7 +100,7 @@ export function Composer({ name, label, sendWord, people, placeholder, initial =
             It has not been sent, and will be gone. To go on later, just leave the page: it is kept in this browser.
           </Confirm>
         )}
-        <Button type="submit" loading={isBusy} disabled={draft.isEmpty}>
+        <Button type="submit" loading={isBusy} disabled={isBusy || draft.isEmpty}>
           {error === null ? sendWord : 'Try again'}
         </Button>
       </Flex>

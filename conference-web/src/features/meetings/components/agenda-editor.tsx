@@ -126,7 +126,7 @@ function SaveAgenda({ draft }: Pick<EditorProps, 'draft'>) {
     <div className={styles.save} data-dirty={isDirty || undefined}>
       {!isStale && <FormProblem error={error} />}
       <Flex gap="3" align="center" wrap="wrap">
-        <Button onClick={() => void draft.save()} loading={isSaving} disabled={!isDirty || isStale}>
+        <Button onClick={() => void draft.save()} loading={isSaving} disabled={isSaving || !isDirty || isStale}>
           Save agenda
         </Button>
         {isDirty && (

@@ -59,7 +59,7 @@ export function MembershipEditor({ person }: { person: Schemas['PersonDto'] }) {
           <div className={styles.grow}>
             <SelectField label="As" words={ROLE_WORDS} value={role} onChange={({ target }) => isRole(target.value) && setRole(target.value)} />
           </div>
-          <Button variant="soft" mb="4" disabled={!conferenceId} loading={set.isPending} onClick={add}>
+          <Button variant="soft" mb="4" disabled={set.isPending || !conferenceId} loading={set.isPending} onClick={add}>
             Add
           </Button>
         </Flex>
