@@ -1,9 +1,10 @@
-import { Body, Controller, Delete, Get, HttpCode, Param, ParseUUIDPipe, Post, Req, Res } from '@nestjs/common';
+import { Body, Controller, Delete, Get, HttpCode, Param, Post, Req, Res } from '@nestjs/common';
 import { ApiTags } from '@nestjs/swagger';
 import type { Request, Response } from 'express';
 import type { Actor } from '../access/actor.js';
 import { CurrentActor } from '../common/decorators/current-actor.decorator.js';
 import { Public, SignedIn } from '../common/decorators/route-access.decorator.js';
+import { IdPipe } from '../common/pipes/path-pipes.js';
 import { AuthService } from './auth.service.js';
 import {
   AcceptInvitationDto,
@@ -115,7 +116,7 @@ export class AuthController {
   @Delete('sessions/:id')
   @HttpCode(204)
   @SignedIn()
-  end(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string): Promise<void> {
+  end(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string): Promise<void> {
     return this.sessions.endOwn(actor, id);
   }
 }

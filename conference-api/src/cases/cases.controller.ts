@@ -1,10 +1,11 @@
-import { Body, Controller, Get, HttpCode, Param, ParseIntPipe, ParseUUIDPipe, Patch, Post, Query } from '@nestjs/common';
+import { Body, Controller, Get, HttpCode, Param, Patch, Post, Query } from '@nestjs/common';
 import { ApiTags } from '@nestjs/swagger';
 import type { Actor } from '../access/actor.js';
 import { Permission } from '../access/permission.js';
 import { CurrentActor } from '../common/decorators/current-actor.decorator.js';
 import { RequirePermission } from '../common/decorators/route-access.decorator.js';
 import { PageQueryDto } from '../common/paging/page-query.dto.js';
+import { IdPipe, NumberPipe } from '../common/pipes/path-pipes.js';
 import { CaseHistoryService } from './case-history.service.js';
 import { CaseListService } from './case-list.service.js';
 import { CaseStageService } from './case-stage.service.js';
@@ -53,28 +54,28 @@ export class CasesController {
 
   @Get(':id')
   @RequirePermission(Permission.CaseRead)
-  findOne(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string): Promise<CaseDto> {
+  findOne(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string): Promise<CaseDto> {
     return this.cases.findOne(actor, id);
   }
 
   /** Saves sections as they are typed; refused with what changed where the base version is an older one. */
   @Patch(':id')
   @RequirePermission(Permission.CaseWrite)
-  save(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string, @Body() body: SaveCaseDto): Promise<SavedCaseDto> {
+  save(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string, @Body() body: SaveCaseDto): Promise<SavedCaseDto> {
     return this.cases.save(actor, id, body);
   }
 
   /** What is there, what is missing, what blocks. */
   @Get(':id/readiness')
   @RequirePermission(Permission.CaseRead)
-  readiness(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string): Promise<ReadinessDto> {
+  readiness(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string): Promise<ReadinessDto> {
     return this.cases.readiness(actor, id);
   }
 
   /** What looks like an identifier in the text. */
   @Get(':id/identifiers')
   @RequirePermission(Permission.CaseRead)
-  identifiers(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string): Promise<IdentifierFindingsDto> {
+  identifiers(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string): Promise<IdentifierFindingsDto> {
     return this.cases.identifiers(actor, id);
   }
 
@@ -82,7 +83,7 @@ export class CasesController {
   @Post(':id/post')
   @HttpCode(200)
   @RequirePermission(Permission.CaseWrite)
-  post(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string, @Body() body: PostCaseDto): Promise<CaseDto> {
+  post(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string, @Body() body: PostCaseDto): Promise<CaseDto> {
     return this.stages.post(actor, id, body);
   }
 
@@ -90,7 +91,7 @@ export class CasesController {
   @Post(':id/release')
   @HttpCode(200)
   @RequirePermission(Permission.CaseCheck)
-  release(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string, @Body() body: ReleaseCaseDto): Promise<CaseDto> {
+  release(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string, @Body() body: ReleaseCaseDto): Promise<CaseDto> {
     return this.stages.release(actor, id, body);
   }
 
@@ -98,7 +99,7 @@ export class CasesController {
   @Post(':id/return')
   @HttpCode(200)
   @RequirePermission(Permission.CaseCheck)
-  return(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string, @Body() body: ReturnCaseDto): Promise<{ returned: boolean }> {
+  return(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string, @Body() body: ReturnCaseDto): Promise<{ returned: boolean }> {
     return this.stages.return(actor, id, body);
   }
 
@@ -106,13 +107,13 @@ export class CasesController {
   @Post(':id/withdraw')
   @HttpCode(200)
   @RequirePermission(Permission.CaseWithdraw)
-  withdraw(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string, @Body() body: WithdrawCaseDto): Promise<CaseDto> {
+  withdraw(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string, @Body() body: WithdrawCaseDto): Promise<CaseDto> {
     return this.stages.withdraw(actor, id, body);
   }
 
   @Get(':id/versions')
   @RequirePermission(Permission.CaseRead)
-  versions(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string, @Query() query: PageQueryDto): Promise<CaseVersionListDto> {
+  versions(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string, @Query() query: PageQueryDto): Promise<CaseVersionListDto> {
     return this.history.versions(actor, id, query);
   }
 
@@ -121,8 +122,8 @@ export class CasesController {
   @RequirePermission(Permission.CaseRead)
   differences(
     @CurrentActor() actor: Actor,
-    @Param('id', ParseUUIDPipe) id: string,
-    @Param('version', ParseIntPipe) version: number,
+    @Param('id', IdPipe) id: string,
+    @Param('version', NumberPipe) version: number,
     @Query() query: DifferencesQueryDto,
   ): Promise<DifferencesDto> {
     return this.history.differences(actor, id, version, query.since);

@@ -1,10 +1,11 @@
-import { Body, Controller, Get, HttpCode, Param, ParseUUIDPipe, Post, Put, Query } from '@nestjs/common';
+import { Body, Controller, Get, HttpCode, Param, Post, Put, Query } from '@nestjs/common';
 import { ApiTags } from '@nestjs/swagger';
 import type { Actor } from '../access/actor.js';
 import { Permission } from '../access/permission.js';
 import { CurrentActor } from '../common/decorators/current-actor.decorator.js';
 import { RequirePermission } from '../common/decorators/route-access.decorator.js';
 import { PageQueryDto } from '../common/paging/page-query.dto.js';
+import { IdPipe } from '../common/pipes/path-pipes.js';
 import { DecisionsService } from './decisions.service.js';
 import {
   AmendDecisionDto,
@@ -33,14 +34,14 @@ export class DecisionsController {
   /** All versions, newest first. */
   @Get('cases/:caseId/decisions')
   @RequirePermission(Permission.DecisionRead)
-  findOfCase(@CurrentActor() actor: Actor, @Param('caseId', ParseUUIDPipe) caseId: string): Promise<DecisionListDto> {
+  findOfCase(@CurrentActor() actor: Actor, @Param('caseId', IdPipe) caseId: string): Promise<DecisionListDto> {
     return this.decisions.findOfCase(actor, caseId);
   }
 
   /** Saves the draft; begins one from the rounds where there is none. */
   @Put('cases/:caseId/decision')
   @RequirePermission(Permission.DecisionWrite)
-  write(@CurrentActor() actor: Actor, @Param('caseId', ParseUUIDPipe) caseId: string, @Body() body: WriteDecisionDto): Promise<DecisionDto> {
+  write(@CurrentActor() actor: Actor, @Param('caseId', IdPipe) caseId: string, @Body() body: WriteDecisionDto): Promise<DecisionDto> {
     return this.decisions.write(actor, caseId, body);
   }
 
@@ -48,27 +49,27 @@ export class DecisionsController {
   @Post('cases/:caseId/decision/sign')
   @HttpCode(200)
   @RequirePermission(Permission.DecisionWrite)
-  sign(@CurrentActor() actor: Actor, @Param('caseId', ParseUUIDPipe) caseId: string, @Body() body: SignDecisionDto): Promise<DecisionDto> {
+  sign(@CurrentActor() actor: Actor, @Param('caseId', IdPipe) caseId: string, @Body() body: SignDecisionDto): Promise<DecisionDto> {
     return this.signing.sign(actor, caseId, body);
   }
 
   /** Begins a new version that will replace the signed one. */
   @Post('decisions/:id/amend')
   @RequirePermission(Permission.DecisionWrite)
-  amend(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string, @Body() body: AmendDecisionDto): Promise<DecisionDto> {
+  amend(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string, @Body() body: AmendDecisionDto): Promise<DecisionDto> {
     return this.decisions.amend(actor, id, body);
   }
 
   @Get('decisions/:id')
   @RequirePermission(Permission.DecisionRead)
-  findOne(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string): Promise<DecisionDto> {
+  findOne(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string): Promise<DecisionDto> {
     return this.decisions.findOne(actor, id);
   }
 
   /** Computes the fingerprints of the conference's chain again. */
   @Get('decisions/:id/check')
   @RequirePermission(Permission.DecisionRead)
-  check(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string): Promise<DecisionCheckDto> {
+  check(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string): Promise<DecisionCheckDto> {
     return this.signing.check(actor, id);
   }
 
@@ -76,7 +77,7 @@ export class DecisionsController {
   @RequirePermission(Permission.DecisionRead)
   findOfConference(
     @CurrentActor() actor: Actor,
-    @Param('conferenceId', ParseUUIDPipe) conferenceId: string,
+    @Param('conferenceId', IdPipe) conferenceId: string,
     @Query() query: PageQueryDto,
   ): Promise<DecisionSummaryListDto> {
     return this.decisions.findOfConference(actor, conferenceId, query);
@@ -84,7 +85,7 @@ export class DecisionsController {
 
   @Get('cases/:caseId/final-decisions')
   @RequirePermission(Permission.DecisionRead)
-  finalsOfCase(@CurrentActor() actor: Actor, @Param('caseId', ParseUUIDPipe) caseId: string): Promise<FinalDecisionListDto> {
+  finalsOfCase(@CurrentActor() actor: Actor, @Param('caseId', IdPipe) caseId: string): Promise<FinalDecisionListDto> {
     return this.finals.findOfCase(actor, caseId);
   }
 
@@ -93,7 +94,7 @@ export class DecisionsController {
   @RequirePermission(Permission.FinalDecisionWrite)
   writeFinal(
     @CurrentActor() actor: Actor,
-    @Param('caseId', ParseUUIDPipe) caseId: string,
+    @Param('caseId', IdPipe) caseId: string,
     @Body() body: WriteFinalDecisionDto,
   ): Promise<FinalDecisionDto> {
     return this.finals.write(actor, caseId, body);

@@ -1,9 +1,10 @@
-import { Body, Controller, Delete, Get, HttpCode, Param, ParseUUIDPipe, Patch, Post, Put } from '@nestjs/common';
+import { Body, Controller, Delete, Get, HttpCode, Param, Patch, Post, Put } from '@nestjs/common';
 import { ApiTags } from '@nestjs/swagger';
 import type { Actor } from '../access/actor.js';
 import { Permission } from '../access/permission.js';
 import { CurrentActor } from '../common/decorators/current-actor.decorator.js';
 import { RequirePermission, SignedIn } from '../common/decorators/route-access.decorator.js';
+import { IdPipe } from '../common/pipes/path-pipes.js';
 import { DiscussionsService } from './discussions.service.js';
 import {
   AnswerThreadDto,
@@ -30,32 +31,32 @@ export class DiscussionsController {
 
   @Get('cases/:caseId/threads')
   @RequirePermission(Permission.CaseRead)
-  findOfCase(@CurrentActor() actor: Actor, @Param('caseId', ParseUUIDPipe) caseId: string): Promise<ThreadListDto> {
+  findOfCase(@CurrentActor() actor: Actor, @Param('caseId', IdPipe) caseId: string): Promise<ThreadListDto> {
     return this.discussions.findOfCase(actor, caseId);
   }
 
   @Post('cases/:caseId/threads')
   @RequirePermission(Permission.RemarkWrite)
-  create(@CurrentActor() actor: Actor, @Param('caseId', ParseUUIDPipe) caseId: string, @Body() body: CreateThreadDto): Promise<ThreadDto> {
+  create(@CurrentActor() actor: Actor, @Param('caseId', IdPipe) caseId: string, @Body() body: CreateThreadDto): Promise<ThreadDto> {
     return this.discussions.create(actor, caseId, body);
   }
 
   @Post('threads/:id/remarks')
   @RequirePermission(Permission.RemarkWrite)
-  reply(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string, @Body() body: CreateRemarkDto): Promise<RemarkDto> {
+  reply(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string, @Body() body: CreateRemarkDto): Promise<RemarkDto> {
     return this.remarks.reply(actor, id, body);
   }
 
   /** The presenter, or who asked, says that a question is answered, or opens it again. */
   @Put('threads/:id/answered')
   @RequirePermission(Permission.RemarkWrite)
-  answered(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string, @Body() body: AnswerThreadDto): Promise<ThreadDto> {
+  answered(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string, @Body() body: AnswerThreadDto): Promise<ThreadDto> {
     return this.discussions.setAnswered(actor, id, body.answered);
   }
 
   @Patch('remarks/:id')
   @RequirePermission(Permission.RemarkWrite)
-  edit(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string, @Body() body: UpdateRemarkDto): Promise<RemarkDto> {
+  edit(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string, @Body() body: UpdateRemarkDto): Promise<RemarkDto> {
     return this.remarks.edit(actor, id, body);
   }
 
@@ -63,13 +64,13 @@ export class DiscussionsController {
   @Delete('remarks/:id')
   @HttpCode(204)
   @RequirePermission(Permission.RemarkWrite)
-  remove(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string): Promise<void> {
+  remove(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string): Promise<void> {
     return this.remarks.remove(actor, id);
   }
 
   @Get('remarks/:id/versions')
   @RequirePermission(Permission.CaseRead)
-  versions(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string): Promise<RemarkVersionListDto> {
+  versions(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string): Promise<RemarkVersionListDto> {
     return this.remarks.versions(actor, id);
   }
 
@@ -77,7 +78,7 @@ export class DiscussionsController {
   @Put('cases/:caseId/read')
   @HttpCode(204)
   @RequirePermission(Permission.CaseRead)
-  read(@CurrentActor() actor: Actor, @Param('caseId', ParseUUIDPipe) caseId: string): Promise<void> {
+  read(@CurrentActor() actor: Actor, @Param('caseId', IdPipe) caseId: string): Promise<void> {
     return this.reading.markRead(actor, caseId);
   }
 

@@ -1,4 +1,4 @@
-import { Body, Controller, Delete, Get, HttpCode, Param, ParseUUIDPipe, Patch, Post, Query, Res, UploadedFile, UseInterceptors } from '@nestjs/common';
+import { Body, Controller, Delete, Get, HttpCode, Param, Patch, Post, Query, Res, UploadedFile, UseInterceptors } from '@nestjs/common';
 import { FileInterceptor } from '@nestjs/platform-express';
 import { ApiBody, ApiConsumes, ApiProduces, ApiTags } from '@nestjs/swagger';
 import type { Response } from 'express';
@@ -6,6 +6,7 @@ import type { Actor } from '../access/actor.js';
 import { Permission } from '../access/permission.js';
 import { CurrentActor } from '../common/decorators/current-actor.decorator.js';
 import { Public, RequirePermission } from '../common/decorators/route-access.decorator.js';
+import { IdPipe } from '../common/pipes/path-pipes.js';
 import { SignedAddressDto } from './dto/signed-address.dto.js';
 import { ImageDto, ImageListDto, UpdateImageDto, UploadImageDto } from './dto/image.dto.js';
 import { ImageFilesService } from './image-files.service.js';
@@ -22,7 +23,7 @@ export class ImagesController {
 
   @Get('cases/:caseId/images')
   @RequirePermission(Permission.CaseRead)
-  findOfCase(@CurrentActor() actor: Actor, @Param('caseId', ParseUUIDPipe) caseId: string): Promise<ImageListDto> {
+  findOfCase(@CurrentActor() actor: Actor, @Param('caseId', IdPipe) caseId: string): Promise<ImageListDto> {
     return this.images.findOfCase(actor, caseId);
   }
 
@@ -40,7 +41,7 @@ export class ImagesController {
   })
   upload(
     @CurrentActor() actor: Actor,
-    @Param('caseId', ParseUUIDPipe) caseId: string,
+    @Param('caseId', IdPipe) caseId: string,
     @UploadedFile() file: Express.Multer.File | undefined,
     @Body() body: UploadImageDto,
   ): Promise<ImageDto> {
@@ -49,14 +50,14 @@ export class ImagesController {
 
   @Patch('images/:id')
   @RequirePermission(Permission.ImageWrite)
-  update(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string, @Body() body: UpdateImageDto): Promise<ImageDto> {
+  update(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string, @Body() body: UpdateImageDto): Promise<ImageDto> {
     return this.images.update(actor, id, body);
   }
 
   @Delete('images/:id')
   @HttpCode(204)
   @RequirePermission(Permission.ImageWrite)
-  remove(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string): Promise<void> {
+  remove(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string): Promise<void> {
     return this.images.remove(actor, id);
   }
 
@@ -65,7 +66,7 @@ export class ImagesController {
   @Public()
   @ApiProduces('image/webp', 'image/png')
   file(
-    @Param('id', ParseUUIDPipe) id: string,
+    @Param('id', IdPipe) id: string,
     @Param('size') size: string,
     @Query() query: SignedAddressDto,
     @Res() response: Response,

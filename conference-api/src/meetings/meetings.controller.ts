@@ -1,9 +1,10 @@
-import { Body, Controller, Get, HttpCode, Param, ParseUUIDPipe, Patch, Post, Put, Query } from '@nestjs/common';
+import { Body, Controller, Get, HttpCode, Param, Patch, Post, Put, Query } from '@nestjs/common';
 import { ApiTags } from '@nestjs/swagger';
 import type { Actor } from '../access/actor.js';
 import { Permission } from '../access/permission.js';
 import { CurrentActor } from '../common/decorators/current-actor.decorator.js';
 import { RequirePermission, SignedIn } from '../common/decorators/route-access.decorator.js';
+import { IdPipe } from '../common/pipes/path-pipes.js';
 import { AgendaService } from './agenda.service.js';
 import {
   AgendaSentDto,
@@ -44,7 +45,7 @@ export class MeetingsController {
   @RequirePermission(Permission.AgendaRead)
   findOfConference(
     @CurrentActor() actor: Actor,
-    @Param('conferenceId', ParseUUIDPipe) conferenceId: string,
+    @Param('conferenceId', IdPipe) conferenceId: string,
     @Query() query: ListMeetingsDto,
   ): Promise<MeetingListDto> {
     return this.meetings.findOfConference(actor, conferenceId, query);
@@ -55,7 +56,7 @@ export class MeetingsController {
   @RequirePermission(Permission.AgendaWrite)
   create(
     @CurrentActor() actor: Actor,
-    @Param('conferenceId', ParseUUIDPipe) conferenceId: string,
+    @Param('conferenceId', IdPipe) conferenceId: string,
     @Body() body: CreateMeetingDto,
   ): Promise<MeetingDto> {
     return this.meetings.create(actor, conferenceId, body);
@@ -63,35 +64,35 @@ export class MeetingsController {
 
   @Get('meetings/:id')
   @RequirePermission(Permission.AgendaRead)
-  findOne(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string): Promise<MeetingDto> {
+  findOne(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string): Promise<MeetingDto> {
     return this.meetings.findOne(actor, id);
   }
 
   /** Moves a meeting that has not begun. */
   @Patch('meetings/:id')
   @RequirePermission(Permission.AgendaWrite)
-  move(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string, @Body() body: UpdateMeetingDto): Promise<MeetingDto> {
+  move(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string, @Body() body: UpdateMeetingDto): Promise<MeetingDto> {
     return this.meetings.move(actor, id, body);
   }
 
   @Post('meetings/:id/cancel')
   @HttpCode(200)
   @RequirePermission(Permission.AgendaWrite)
-  cancel(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string, @Body() body: CancelMeetingDto): Promise<MeetingDto> {
+  cancel(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string, @Body() body: CancelMeetingDto): Promise<MeetingDto> {
     return this.meetings.cancel(actor, id, body);
   }
 
   /** Open cases that could be listed, with what is missing. */
   @Get('meetings/:id/listable-cases')
   @RequirePermission(Permission.AgendaWrite)
-  listable(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string): Promise<ListableCasesDto> {
+  listable(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string): Promise<ListableCasesDto> {
     return this.listableCases.find(actor, id);
   }
 
   /** The whole agenda at once: cases, minutes, order. */
   @Put('meetings/:id/agenda')
   @RequirePermission(Permission.AgendaWrite)
-  setAgenda(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string, @Body() body: SetAgendaDto): Promise<MeetingDto> {
+  setAgenda(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string, @Body() body: SetAgendaDto): Promise<MeetingDto> {
     return this.agenda.set(actor, id, body);
   }
 
@@ -99,21 +100,21 @@ export class MeetingsController {
   @Post('meetings/:id/agenda/send')
   @HttpCode(200)
   @RequirePermission(Permission.AgendaWrite)
-  sendAgenda(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string, @Body() body: SendAgendaDto): Promise<AgendaSentDto> {
+  sendAgenda(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string, @Body() body: SendAgendaDto): Promise<AgendaSentDto> {
     return this.agenda.send(actor, id, body);
   }
 
   @Post('meetings/:id/start')
   @HttpCode(200)
   @RequirePermission(Permission.MeetingRun)
-  start(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string): Promise<MeetingDto> {
+  start(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string): Promise<MeetingDto> {
     return this.run.start(actor, id);
   }
 
   @Post('meetings/:id/close')
   @HttpCode(200)
   @RequirePermission(Permission.MeetingRun)
-  close(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string): Promise<MeetingDto> {
+  close(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string): Promise<MeetingDto> {
     return this.run.close(actor, id);
   }
 
@@ -121,8 +122,8 @@ export class MeetingsController {
   @RequirePermission(Permission.AttendanceWrite)
   setAttendance(
     @CurrentActor() actor: Actor,
-    @Param('id', ParseUUIDPipe) id: string,
-    @Param('personId', ParseUUIDPipe) personId: string,
+    @Param('id', IdPipe) id: string,
+    @Param('personId', IdPipe) personId: string,
     @Body() body: SetAttendanceDto,
   ): Promise<MeetingDto> {
     return this.run.setAttendance(actor, id, personId, body.state);
@@ -134,8 +135,8 @@ export class MeetingsController {
   @RequirePermission(Permission.MeetingRun)
   defer(
     @CurrentActor() actor: Actor,
-    @Param('id', ParseUUIDPipe) id: string,
-    @Param('itemId', ParseUUIDPipe) itemId: string,
+    @Param('id', IdPipe) id: string,
+    @Param('itemId', IdPipe) itemId: string,
     @Body() body: DeferItemDto,
   ): Promise<MeetingDto> {
     return this.run.defer(actor, id, itemId, body);

@@ -1,9 +1,10 @@
-import { Body, Controller, Get, HttpCode, Param, ParseUUIDPipe, Patch, Post, Query } from '@nestjs/common';
+import { Body, Controller, Get, HttpCode, Param, Patch, Post, Query } from '@nestjs/common';
 import { ApiTags } from '@nestjs/swagger';
 import type { Actor } from '../access/actor.js';
 import { Permission } from '../access/permission.js';
 import { CurrentActor } from '../common/decorators/current-actor.decorator.js';
 import { RequirePermission, SignedIn } from '../common/decorators/route-access.decorator.js';
+import { IdPipe } from '../common/pipes/path-pipes.js';
 import { InvitePersonDto, ListPeopleDto, PersonDto, PersonListDto, UnitDto, UnitListDto, UpdatePersonDto, WriteUnitDto } from './dto/people.dto.js';
 import { PeopleInvitationsService } from './people-invitations.service.js';
 import { PeopleService } from './people.service.js';
@@ -33,13 +34,13 @@ export class PeopleController {
 
   @Get('people/:id')
   @RequirePermission(Permission.PeopleManage)
-  findOne(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string): Promise<PersonDto> {
+  findOne(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string): Promise<PersonDto> {
     return this.people.findOne(actor, id);
   }
 
   @Patch('people/:id')
   @RequirePermission(Permission.PeopleManage)
-  update(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string, @Body() body: UpdatePersonDto): Promise<PersonDto> {
+  update(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string, @Body() body: UpdatePersonDto): Promise<PersonDto> {
     return this.people.update(actor, id, body);
   }
 
@@ -47,7 +48,7 @@ export class PeopleController {
   @Post('people/:id/invitation')
   @HttpCode(204)
   @RequirePermission(Permission.PeopleManage)
-  inviteAgain(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string): Promise<void> {
+  inviteAgain(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string): Promise<void> {
     return this.invitations.inviteAgain(actor, id);
   }
 
@@ -65,7 +66,7 @@ export class PeopleController {
 
   @Patch('units/:id')
   @RequirePermission(Permission.UnitsManage)
-  updateUnit(@CurrentActor() actor: Actor, @Param('id', ParseUUIDPipe) id: string, @Body() body: WriteUnitDto): Promise<UnitDto> {
+  updateUnit(@CurrentActor() actor: Actor, @Param('id', IdPipe) id: string, @Body() body: WriteUnitDto): Promise<UnitDto> {
     return this.units.update(actor, id, body);
   }
 }

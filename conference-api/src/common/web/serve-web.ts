@@ -1,7 +1,7 @@
 import type { NestExpressApplication } from '@nestjs/platform-express';
 import express, { type NextFunction, type Request, type Response } from 'express';
 import { existsSync } from 'node:fs';
-import { join } from 'node:path';
+import { extname, join } from 'node:path';
 
 /** The built web on the API's own origin: hashed files for ever, everything else gets the page. */
 export function serveWeb(app: NestExpressApplication, folder: string): void {
@@ -10,7 +10,8 @@ export function serveWeb(app: NestExpressApplication, folder: string): void {
   app.use('/assets', express.static(join(folder, 'assets'), { immutable: true, maxAge: '1y', fallthrough: false, index: false }));
   app.use(express.static(folder, { index: false, maxAge: '1h' }));
   app.use((request: Request, response: Response, next: NextFunction) => {
-    const wantsPage = (request.method === 'GET' || request.method === 'HEAD') && !request.path.startsWith('/api/');
+    // a page's address has no ending; a file that is not there is not the page
+    const wantsPage = (request.method === 'GET' || request.method === 'HEAD') && !request.path.startsWith('/api/') && !extname(request.path);
     if (!wantsPage) return next();
     response.set('Cache-Control', 'no-cache').sendFile(page);
   });
