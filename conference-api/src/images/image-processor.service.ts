@@ -46,7 +46,8 @@ export class ImageProcessor {
 
   /** Lossless where it is measured on; PNG, since lossless WebP takes ten times as long for a radiograph. */
   private async encode({ data, width, height, channels }: PlainPixels): Promise<ProcessedImage['files']> {
-    const picture = () => sharp(data, { raw: { width, height, channels }, limitInputPixels: MOST_PIXELS });
+    const picture = () =>
+      sharp(data, { raw: { width, height, channels }, limitInputPixels: MOST_PIXELS }).toColourspace(channels === 1 ? 'b-w' : 'srgb');
     const [full, view, thumb] = await Promise.all([
       picture().png({ compressionLevel: 3, adaptiveFiltering: true }).toBuffer(),
       fitted(picture(), VIEW_EDGE).webp({ quality: 85, effort: 2 }).toBuffer(),

@@ -23,7 +23,10 @@ export async function objectOf(test: TestApp, key: string): Promise<Buffer> {
 
 /** The stored pixels of one size. */
 export async function pixelsOf(test: TestApp, imageId: string, size: ImageSize = 'full') {
-  const { data, info } = await sharp(await objectOf(test, `images/${imageId}/${size}`))
+  const object = await objectOf(test, `images/${imageId}/${size}`);
+  const { channels } = await sharp(object).metadata();
+  const { data, info } = await sharp(object)
+    .toColourspace(channels === 1 ? 'b-w' : 'srgb')
     .raw()
     .toBuffer({ resolveWithObject: true });
   const at = (x: number, y: number) => [...data.subarray((y * info.width + x) * info.channels, (y * info.width + x) * info.channels + info.channels)];
