@@ -1,5 +1,6 @@
 import { spawn } from 'node:child_process';
 import { mkdir, readdir, readFile } from 'node:fs/promises';
+import { availableParallelism } from 'node:os';
 import { join } from 'node:path';
 import type { Projection } from '../../calc/vocabulary/images.js';
 
@@ -30,7 +31,9 @@ export async function drawDemoImages(projectFolder: string, cacheFolder: string)
   const entries = demoImages();
   const there = new Set(await readdir(cacheFolder));
   const missing = entries.filter((entry) => !there.has(entry.fileName));
-  if (missing.length) await draw(join(phantom, 'main.mjs'), cacheFolder, projectFolder);
+  const shares = Math.min(4, availableParallelism());
+  if (missing.length)
+    await Promise.all(Array.from({ length: shares }, (_, index) => draw(join(phantom, 'main.mjs'), cacheFolder, projectFolder, `${index + 1}/${shares}`)));
   return Promise.all(
     entries.map(async (entry) => ({
       caseKey: entry.caseKey,
@@ -43,8 +46,8 @@ export async function drawDemoImages(projectFolder: string, cacheFolder: string)
   );
 }
 
-function draw(program: string, folder: string, cwd: string): Promise<void> {
-  const child = spawn(process.execPath, [program, '--out', folder], { cwd, stdio: ['ignore', 'inherit', 'inherit'] });
+function draw(program: string, folder: string, cwd: string, share: string): Promise<void> {
+  const child = spawn(process.execPath, [program, '--out', folder, '--share', share], { cwd, stdio: ['ignore', 'inherit', 'inherit'] });
   return new Promise((resolve, reject) => {
     child.once('error', reject);
     child.once('exit', (code) => (code === 0 ? resolve() : reject(new Error(`drawing the demo's pictures ended with ${code}`))));
