@@ -168,3 +168,19 @@ describe('the margin', () => {
     expect(within(await screen.findByRole('group', { name: 'Remarks on Patient' })).queryByRole('textbox')).toBeNull();
   });
 });
+
+it('goes to the next new remark without pressing anything but the fold', async () => {
+  threads = [thread('case', '', [remark('r1', 'First', { isNew: true, isMine: false }), remark('r2', 'Second', { isNew: true, isMine: true })])];
+  render(
+    <SignedIn>
+      <Margin caseId={CASE} anchorKind="case" />
+    </SignedIn>,
+  );
+  Element.prototype.scrollIntoView ??= () => {};
+  const next = await screen.findByRole('button', { name: 'Go to the next' });
+  await userEvent.click(next);
+  expect(screen.getByRole('button', { name: /2.remarks, 2 new/ })).toHaveAttribute('aria-expanded', 'true');
+  await userEvent.click(next);
+  await waitFor(() => expect(screen.getByText('Second').closest('li')).toHaveFocus());
+  expect(screen.queryByRole('alertdialog')).toBeNull();
+});

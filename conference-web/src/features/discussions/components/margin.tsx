@@ -37,7 +37,7 @@ export function Margin({ caseId, anchorKind, anchorRef, about }: MarginProps) {
   return (
     <div className={styles.margin} role="group" aria-label={`Remarks on ${words}`} data-filled={threads.length > 0 || undefined} data-margin>
       {anchorKind === 'case' && <FreshNote threads={query.data.items} />}
-      <button type="button" className={styles.fold} aria-expanded={isOpen} aria-controls={bodyId} onClick={() => setOpen(!isOpen)}>
+      <button type="button" className={styles.fold} data-fold aria-expanded={isOpen} aria-controls={bodyId} onClick={() => setOpen(!isOpen)}>
         {foldWords(counts, mayWrite)}
       </button>
       <div id={bodyId} className={styles.body} data-open={isOpen || undefined}>
@@ -113,7 +113,7 @@ function FreshNote({ threads }: { threads: Thread[] }) {
     const next = all[(all.indexOf(last.current as HTMLElement) + 1) % all.length];
     if (!next) return;
     last.current = next;
-    next.closest('[data-margin]')?.querySelector<HTMLButtonElement>('button[aria-expanded="false"]')?.click();
+    next.closest('[data-margin]')?.querySelector<HTMLButtonElement>('[data-fold][aria-expanded="false"]')?.click();
     next.tabIndex = -1;
     requestAnimationFrame(() => {
       next.scrollIntoView({ block: 'center' });
