@@ -2,7 +2,7 @@ import type { Side } from '@kerfside/calc/vocabulary/case.js';
 import { HEAD_DRIVE, QUADRANT, type RimSector, type Screw, SECTOR_STATE } from '@kerfside/calc/vocabulary/case-content.js';
 import { counted, quantity } from '@/lib/units';
 import { HOURS, placeOf, quadrantMiddle } from './rim-geometry';
-import { ordinal, sectorAt } from './rim-order';
+import { sectorAt } from './rim-order';
 
 /** `12 o’clock, superior`. */
 export function hourWords(hour: number, side: Side | null): string {
@@ -14,7 +14,8 @@ export const stateWords = ({ state }: RimSector): string => (state ? SECTOR_STAT
 
 /** All that is said of a sector, for a reader that can't see the drawing. */
 export function sectorWords(sector: RimSector, side: Side | null, isLost: boolean): string {
-  const cut = sector.order ? `cut ${ordinal(sector.order)}` : 'no place in the order';
+  // the number as it is drawn, for those who speak what they see
+  const cut = sector.order ? `cut ${sector.order}` : 'no place in the order';
   const words = [stateWords(sector), cut, sector.note ?? '', isLost ? 'bone lost' : ''].filter(Boolean);
   return `${hourWords(sector.hour, side)}: ${words.join('; ')}`;
 }

@@ -24,10 +24,10 @@ export function ReadinessList({ readiness, onGoTo }: ReadinessListProps) {
         const missing = readiness.items.filter((item) => !item.done && item.weight === weight);
         if (missing.length === 0) return null;
         return (
-          <section key={weight}>
-            <h3>
+          <div key={weight}>
+            <p className={styles.weight}>
               {WEIGHT_WORDS[weight]} ({missing.length})
-            </h3>
+            </p>
             <ul>
               {missing.map((item) => (
                 <li key={item.id} data-blocks={weight === 'blocks-posting' || undefined}>
@@ -44,7 +44,7 @@ export function ReadinessList({ readiness, onGoTo }: ReadinessListProps) {
                 </li>
               ))}
             </ul>
-          </section>
+          </div>
         );
       })}
       <details>

@@ -37,7 +37,7 @@ function PartForm({ of }: { of: Binding<ImplantPart> }) {
       </div>
       {hasScrews(of.value) && (
         <>
-          <h4 className={styles.sub}>Screws seen</h4>
+          <p className={styles.sub}>Screws seen</p>
           <ListEditor of={bindList<ImplantPart, Screw>(of, 'screws')} noun="screw" make={() => ({ id: newId('screw') })} disabled={of.disabled} empty="None listed.">
             {(screw) => <ScrewForm of={screw} />}
           </ListEditor>

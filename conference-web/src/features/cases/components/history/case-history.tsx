@@ -1,4 +1,4 @@
-import { SECTION_WORDS } from '@kerfside/calc/vocabulary/case.js';
+import { SECTION_WORDS, SECTIONS } from '@kerfside/calc/vocabulary/case.js';
 import { useInfiniteQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { ErrorState, TableSkeleton } from '@/components/page-states';
@@ -49,7 +49,7 @@ function Group({ caseId, group }: { caseId: string; group: VersionGroup }) {
   const [isOpen, setOpen] = useState(false);
   // the first version is the beginning and differs from nothing
   const since = Math.max(1, group.first - 1);
-  const what = group.sections.length ? group.sections.map((section) => SECTION_WORDS[section]).join(', ') : 'Begun';
+  const what = SECTIONS.filter((section) => (group.sections as string[]).includes(section)).map((section) => SECTION_WORDS[section]).join(', ') || 'Begun';
   const head = (
     <>
       <strong>{what}</strong>
