@@ -1,4 +1,3 @@
-import { Theme } from '@radix-ui/themes';
 import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { Link, useParams } from 'react-router-dom';
@@ -7,6 +6,7 @@ import { EmptyState, Loaded, TextSkeleton } from '@/components/page-states';
 import { caseQuery } from '@/features/cases/api/get-case';
 import { Margin } from '@/features/discussions/components/margin';
 import { useLiveEvents } from '@/lib/live-events/use-live-events';
+import { useDarkRoom } from '@/lib/use-appearance';
 import { useTitle } from '@/lib/use-title';
 import { type CaseImage, imagesQuery } from '../api/list-images';
 import { imageWords } from '../image-words';
@@ -22,10 +22,11 @@ import styles from './room.module.css';
 export function ImageRoom() {
   const { id: caseId = '', imageId = '' } = useParams();
   useTitle('Image');
+  useDarkRoom();
   useLiveEvents();
   const query = useQuery(imagesQuery(caseId));
   return (
-    <Theme appearance="dark" accentColor="bronze" grayColor="sand" radius="small" panelBackground="solid" className={styles.room}>
+    <div className={styles.room}>
       <Loaded query={query} what="case" skeleton={<TextSkeleton lines={4} />}>
         {({ items }) =>
           items.some(({ id }) => id === imageId) ? (
@@ -37,7 +38,7 @@ export function ImageRoom() {
           )
         }
       </Loaded>
-    </Theme>
+    </div>
   );
 }
 

@@ -44,12 +44,12 @@ export function RoomToolbar({ room, canSplit, actualSize, isFullScreen, toggleFu
         <ToolButton shortcut="+" label="Zoom in" onPress={() => change({ type: 'zoom', factor: 1.25 })}>
           <ZoomInIcon />
         </ToolButton>
-        <ToolButton shortcut="1" label="One pixel on one" onPress={actualSize}>
+        <ToolButton shortcut="1" label="1:1, one pixel on one" onPress={actualSize}>
           1:1
         </ToolButton>
       </div>
       <div className={styles.group}>
-        <ToolButton shortcut="d" label="Dragging sets the window" isOn={tool === 'window'} onPress={() => dispatch({ type: 'tool', tool: tool === 'move' ? 'window' : 'move' })}>
+        <ToolButton shortcut="d" isOn={tool === 'window'} onPress={() => dispatch({ type: 'tool', tool: tool === 'move' ? 'window' : 'move' })}>
           Drag sets window
         </ToolButton>
         <Slider label="Level" shortcut="l L" min={0} max={100} value={view.level} onSlide={(level) => change({ type: 'window', level })} />
