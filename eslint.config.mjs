@@ -3,7 +3,7 @@ import globals from 'globals';
 import tseslint from 'typescript-eslint';
 
 export default tseslint.config(
-  { ignores: ['**/dist/**', '**/node_modules/**', '**/.data/**', '**/coverage/**', '**/.cache/**', '**/screenshots/**', '**/*.gen.ts'] },
+  { ignores: ['**/dist/**', '**/.openapi/**', '**/node_modules/**', '**/.data/**', '**/coverage/**', '**/.cache/**', '**/screenshots/**', '**/*.gen.ts'] },
   { linterOptions: { reportUnusedDisableDirectives: 'error' } },
   ...tseslint.configs.recommended,
   {

@@ -1,4 +1,4 @@
-import { type DemoCase, options, parts, rim, screws, shellKit, shellSteps, USUAL_ORDER } from '../demo-case.js';
+import { type DemoCase, options, parts, rim, screws, shellKit, shellSteps } from '../demo-case.js';
 
 /** Patients short of bone. All of it is invented. */
 export const BONE_CASES: DemoCase[] = [
