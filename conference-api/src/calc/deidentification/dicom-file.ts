@@ -46,7 +46,7 @@ export function readMeta(bytes: Uint8Array): DicomMeta {
   if (!syntaxUid) throw new FileRefusal('broken', `The DICOM file does not say how its picture is written: ${tagText(TRANSFER_SYNTAX)} is missing.`);
   const syntax = TRANSFER_SYNTAXES.get(syntaxUid);
   if (!syntax)
-    throw new FileRefusal('not-read', `The picture is written in a way that is not read here (transfer syntax ${syntaxUid.slice(0, 64)}). Export it without compression.`);
+    throw new FileRefusal('not-read', `The picture is written in a way that is not read here (transfer syntax ${/^[\d.]{1,64}$/.test(syntaxUid) ? syntaxUid : 'unknown'}). Export it without compression.`);
   return { elements, syntax, syntaxUid, end };
 }
 

@@ -14,3 +14,5 @@ export const MOST_PARTS = 100_000;
 export const LONGEST_SHOWN = 80;
 /** The longest look-up table or palette: 65 536 entries of two bytes. */
 export const LONGEST_TABLE = 131_072;
+/** The most that a deflated file may unpack to: the largest picture of 16 bits. */
+export const MOST_INFLATED = 128 * 1024 * 1024;

@@ -38,7 +38,7 @@ export function pictureFacts(dataSet: DicomDataSet): PictureFacts {
   if (frames > MOST_FRAMES) throw new FileRefusal('too-large', `The DICOM file says that it holds ${frames} pictures; ${MOST_FRAMES} are the most.`);
   if (!isKnown(BITS, bitsAllocated) || !isKnown(SAMPLES, samples))
     throw new FileRefusal('not-read', `Pictures with ${samples} samples of ${bitsAllocated} bits are not read here.`);
-  if (!isKnown(PHOTOMETRIC, photometric)) throw new FileRefusal('not-read', `Pictures of the kind '${shown(photometric)}' are not read here.`);
+  if (!isKnown(PHOTOMETRIC, photometric)) throw new FileRefusal('not-read', `Pictures of this kind are not read here: ${tagText(PHOTOMETRIC)} Photometric Interpretation names one that is not known.`);
   return facts;
 }
 
@@ -62,5 +62,3 @@ function needed(dataSet: DicomDataSet, tag: number): number {
 }
 
 const isKnown = (tag: number, value: string | number) => KEPT.get(tag)!.rule([value] as string[]) !== null;
-
-const shown = (text: string) => text.replace(/[^ -~]/g, '?').slice(0, 16);

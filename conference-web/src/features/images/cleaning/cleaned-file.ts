@@ -29,3 +29,8 @@ export interface CleanOptions {
   /** That a person looked for text in the picture: only then does a DICOM file say that there is none. */
   pixelsConfirmed: boolean;
 }
+
+const ENDINGS: Record<FileKind, string> = { dicom: 'dcm', jpeg: 'jpg', png: 'png', webp: 'webp', tiff: 'tif' };
+
+/** A name for sending: the original's may hold the patient's. */
+export const uploadName = ({ kind }: Pick<CleanedFile, 'kind'>): string => `picture.${ENDINGS[kind]}`;

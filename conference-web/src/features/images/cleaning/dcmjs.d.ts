@@ -6,8 +6,7 @@ declare module 'dcmjs' {
   }
   export type DicomValues = Record<string, DicomValue>;
 
-  class DicomDict {
-    constructor(meta: DicomValues);
+  export interface DicomDict {
     meta: DicomValues;
     dict: DicomValues;
     write(options?: { fragmentMultiframe?: boolean; allowInvalidVRLength?: boolean }): ArrayBuffer;
@@ -15,7 +14,7 @@ declare module 'dcmjs' {
 
   const dcmjs: {
     data: {
-      DicomDict: typeof DicomDict;
+      DicomDict: new (meta: DicomValues) => DicomDict;
       DicomMetaDictionary: { dictionary: Record<string, { name: string; vr: string } | undefined> };
     };
     log: { disableAll?: () => void };

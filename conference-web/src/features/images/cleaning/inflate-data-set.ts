@@ -1,5 +1,5 @@
 import { FileRefusal } from '@kerfside/calc/deidentification/file-refusal';
-import { MOST_BYTES } from '@kerfside/calc/deidentification/limits';
+import { MOST_INFLATED } from '@kerfside/calc/deidentification/limits';
 
 /**
  * Unpacks a deflated data set (PS3.5 A.5), and stops where it grows beyond what is taken: a few hundred
@@ -16,9 +16,9 @@ export async function inflateDataSet(packed: Uint8Array<ArrayBuffer>): Promise<U
     if (done) return joined(pieces, length);
     pieces.push(value);
     length += value.length;
-    if (length > MOST_BYTES) {
+    if (length > MOST_INFLATED) {
       await reader.cancel().catch(() => undefined);
-      throw new FileRefusal('too-large', `The DICOM file unpacks to more than ${MOST_BYTES / 1024 / 1024} MB.`);
+      throw new FileRefusal('too-large', `The DICOM file unpacks to more than ${MOST_INFLATED / 1024 / 1024} MB.`);
     }
   }
 }
