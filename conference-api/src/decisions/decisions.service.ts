@@ -72,7 +72,7 @@ export class DecisionsService {
   /** Saves the draft; begins one where there is none. A draft can be written from the meeting's start on. */
   async write(actor: Actor, caseId: string, body: WriteDecisionDto): Promise<DecisionDto> {
     return this.work.run(actor, async (tx) => {
-      const found = await this.access.case(actor, Permission.DecisionWrite, caseId, { stages: ['listed', 'decided', 'final'], manager: tx.manager, lock: true });
+      const found = await this.access.case(actor, Permission.DecisionWrite, caseId, { stages: ['listed', 'decided', 'final', 'reported'], manager: tx.manager, lock: true });
       const draft = await tx.manager.findOneBy(Decision, { caseId, signedAt: IsNull() });
       if (!draft && found.stage !== 'listed') throw wrongStage('The decision is signed; amend it to begin a new version.');
       const meetingId = draft?.meetingId ?? (await this.runningMeeting(tx.manager, caseId));
@@ -96,7 +96,7 @@ export class DecisionsService {
     const signed = await this.dataSource.manager.findOneBy(Decision, { id });
     if (!signed) throw notFound('decision');
     return this.work.run(actor, async (tx) => {
-      const found = await this.access.case(actor, Permission.DecisionWrite, signed.caseId, { stages: ['decided', 'final'], manager: tx.manager, lock: true });
+      const found = await this.access.case(actor, Permission.DecisionWrite, signed.caseId, { stages: ['decided', 'final', 'reported'], manager: tx.manager, lock: true });
       const newest = await tx.manager.findOneOrFail(Decision, { where: { caseId: found.id }, order: { version: 'DESC' } });
       if (!newest.signedAt) throw new Problem('conflict', 'An amendment is being drafted already.');
       if (newest.id !== signed.id) throw new Problem('conflict', 'This version was replaced; amend the newest one.');
@@ -177,7 +177,8 @@ export class DecisionsService {
   ): Promise<Decision> {
     if (baseRevision !== undefined) throw staleVersion('There is no draft any more.', { currentRevision: null });
     const { rounds } = await this.circumstances.gather(manager, found, meetingId);
-    const figures = rounds.at(-1)?.figures ?? [];
+    const rated = rounds.filter((round) => round.figures.some((one) => one.n > 0));
+    const figures = rated.at(-1)?.figures ?? [];
     const best = [...figures].sort((a, b) => (b.median ?? 0) - (a.median ?? 0))[0];
     return manager.save(
       manager.create(Decision, {

@@ -34,11 +34,11 @@ export class SigningService {
   ) {}
 
   async sign(actor: Actor, caseId: string, body: SignDecisionDto): Promise<DecisionDto> {
-    await this.access.case(actor, Permission.DecisionWrite, caseId, { stages: ['listed', 'decided', 'final'] });
+    await this.access.case(actor, Permission.DecisionWrite, caseId, { stages: ['listed', 'decided', 'final', 'reported'] });
     if (!(await this.passwords.verifyOwn(actor.personId, body.password)))
       throw invalid('password', 'wrong-password', 'This is not your password. The decision was not signed.');
     return this.work.run(actor, async (tx) => {
-      const found = await this.access.case(actor, Permission.DecisionWrite, caseId, { stages: ['listed', 'decided', 'final'], manager: tx.manager, lock: true });
+      const found = await this.access.case(actor, Permission.DecisionWrite, caseId, { stages: ['listed', 'decided', 'final', 'reported'], manager: tx.manager, lock: true });
       const draft = await tx.manager.findOneBy(Decision, { caseId, signedAt: IsNull() });
       if (!draft) throw wrongStage('There is no draft to sign; perhaps it was signed just now.');
       if (draft.revision !== body.baseRevision)

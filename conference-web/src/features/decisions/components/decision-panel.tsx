@@ -42,7 +42,7 @@ function Decisions({ found, items }: { found: Case; items: Decision[] }) {
   return (
     <>
       {signed.map((decision, index) => (
-        <Signed key={decision.id} decision={decision} isNewest={index === 0} mayAmend={index === 0 && mayWrite && !draft && found.stage !== 'reported'} />
+        <Signed key={decision.id} decision={decision} isNewest={index === 0} mayAmend={index === 0 && mayWrite && !draft} />
       ))}
       {draft && mayWrite && <DecisionDraft key={draft.id} draft={draft} found={found} />}
       {!draft && signed.length === 0 && (mayWrite ? <Begin caseId={found.id} /> : <p className="label-text">{WAITING[found.stage] ?? 'No decision yet.'}</p>)}
