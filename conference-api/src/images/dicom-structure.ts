@@ -11,8 +11,8 @@ const EXPLICIT_BIG = '1.2.840.10008.1.2.2';
 const DEFLATED = '1.2.840.10008.1.2.1.99';
 const RUN_LENGTHS = '1.2.840.10008.1.2.5';
 const PIXEL_DATA = 0x7fe00010;
-// what 60 million pixels of three 16-bit samples take
-const MOST_INFLATED = MOST_PIXELS * 6;
+// what the largest picture takes in 16 bits
+const MOST_INFLATED = MOST_PIXELS * 2;
 
 type Fact = 'samples' | 'photometric' | 'frames' | 'rows' | 'columns' | 'bits';
 

@@ -1,7 +1,7 @@
 import { BadRequestException, type CallHandler, type ExecutionContext, Injectable, type NestInterceptor, PayloadTooLargeException } from '@nestjs/common';
 import { isUUID } from 'class-validator';
 import type { Request } from 'express';
-import { catchError, EMPTY, finalize, type Observable, throwError } from 'rxjs';
+import { catchError, finalize, type Observable, throwError } from 'rxjs';
 import type { Actor } from '../access/actor.js';
 import { invalid, Problem } from '../common/problems/problem.js';
 import { Settings } from '../config/settings.js';
@@ -29,9 +29,9 @@ export class UploadGate implements NestInterceptor {
     // a malformed id is the route's to refuse
     if (typeof caseId === 'string' && isUUID(caseId)) await this.images.assertMayUpload(request.user, caseId);
     await this.enter();
-    if (request.destroyed) {
+    if (request.socket.destroyed) {
       this.leave();
-      return EMPTY;
+      throw brokenOff();
     }
     return next.handle().pipe(
       catchError((error: unknown) => throwError(() => this.problemOf(error, request))),
@@ -65,7 +65,9 @@ export class UploadGate implements NestInterceptor {
     const code = ((error as Error).cause as { code?: string } | undefined)?.code ?? '';
     if (['LIMIT_UNEXPECTED_FILE', 'LIMIT_FILE_COUNT'].includes(code)) return invalid('file', 'one-file', 'Send one picture, in the field file.');
     const isMalformed = error instanceof BadRequestException && (code !== '' || error.message.startsWith('Multipart'));
-    if (isMalformed || request.destroyed) return new Problem('bad-request', 'The upload broke off, or is not well-formed. Send it again.');
+    if (isMalformed || request.socket.destroyed) return brokenOff();
     return error;
   }
 }
+
+const brokenOff = () => new Problem('bad-request', 'The upload broke off, or is not well-formed. Send it again.');
