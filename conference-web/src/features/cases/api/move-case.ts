@@ -11,12 +11,18 @@ function useStageChanged(id: string) {
 
 const of = (id: string) => ({ path: { id } });
 
-/** draft → being checked */
-export function usePostCase(id: string) {
-  const onSuccess = useStageChanged(id);
+/**
+ * draft → being checked. `leave` is called before the case is fetched anew: the form goes from the page as soon as it
+ * can no longer be edited, and what hangs on it would never be called.
+ */
+export function usePostCase(id: string, leave: () => void) {
+  const stageChanged = useStageChanged(id);
   return useMutation({
     mutationFn: (baseVersion: number) => call(api.POST('/api/cases/{id}/post', { params: of(id), body: { baseVersion } })),
-    onSuccess,
+    onSuccess: () => {
+      leave();
+      return stageChanged();
+    },
   });
 }
 

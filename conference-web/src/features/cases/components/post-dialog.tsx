@@ -62,11 +62,11 @@ interface PostFormProps extends Pick<PostDialogProps, 'caseId' | 'onGoTo'> {
 
 function PostForm({ caseId, version, isPreparing, onGoTo }: PostFormProps) {
   const navigate = useNavigate();
-  const post = usePostCase(caseId);
+  const post = usePostCase(caseId, () => void navigate(paths.case(caseId)));
   const query = useQuery(readinessQuery(caseId));
   const isNotSaved = !isPreparing && version === null;
   const submit = () => {
-    if (version !== null) post.mutate(version, { onSuccess: () => navigate(paths.case(caseId)) });
+    if (version !== null) post.mutate(version);
   };
   return (
     <>

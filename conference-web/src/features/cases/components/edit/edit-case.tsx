@@ -2,8 +2,8 @@ import { CONTENT_SECTIONS } from '@kerfside/calc/vocabulary/case-content.js';
 import { SECTIONS } from '@kerfside/calc/vocabulary/case.js';
 import { Button } from '@radix-ui/themes';
 import { useQuery } from '@tanstack/react-query';
-import { useMemo } from 'react';
-import { Link } from 'react-router-dom';
+import { useEffect, useMemo } from 'react';
+import { Link, useLocation } from 'react-router-dom';
 import { paths } from '@/app/paths';
 import { SaveState } from '@/components/save-state';
 import type { Schemas } from '@/lib/api/types';
@@ -15,7 +15,7 @@ import { PostDialog } from '../post-dialog';
 import { ConflictBox } from './conflict-box';
 import { DraftNotices } from './draft-notices';
 import { EditImages } from './edit-images';
-import { goToPlace } from './go-to-place';
+import { goToPlace, sectionInAddress } from './go-to-place';
 import { ReadinessPanel } from './readiness-panel';
 import { EditSection, SectionForm } from './section-forms';
 import { SectionNav } from './section-nav';
@@ -31,6 +31,10 @@ export function EditCase({ found }: { found: Schemas['CaseDto'] }) {
   const findings = useMemo(() => identifiers.data?.items ?? [], [identifiers.data]);
   const byPlace = useMemo(() => findingsByPlace(findings), [findings]);
   const { content } = state;
+  const asked = sectionInAddress(useLocation().hash);
+  useEffect(() => {
+    if (asked) goToPlace(asked);
+  }, [asked]);
   const versionToPost = async () => ((await draft.saveNow()) ? draft.getState().version : null);
   return (
     <FindingsContext value={byPlace}>

@@ -4,7 +4,7 @@ import { paths } from '@/app/paths';
 import { Confirm } from '@/components/confirm';
 import type { Schemas } from '@/lib/api/types';
 import { useReleaseCase, useReturnCase, useWithdrawCase } from '../../api/move-case';
-import { goToPlace } from '../edit/go-to-place';
+import { sectionId } from '../edit/go-to-place';
 import { PostDialog } from '../post-dialog';
 
 type Found = Schemas['CaseDto'];
@@ -16,11 +16,7 @@ export const RATINGS_ID = 'ratings';
 export function SheetActions({ found }: { found: Found }) {
   const { actions } = found;
   const navigate = useNavigate();
-  const goToForm = (section: string) => {
-    void navigate(paths.editCase(found.id));
-    // the form is fetched first
-    setTimeout(() => goToPlace(section), 600);
-  };
+  const goToForm = (section: string) => void navigate(`${paths.editCase(found.id)}#${sectionId(section)}`);
   return (
     <>
       {actions.rate && (
