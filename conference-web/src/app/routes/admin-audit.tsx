@@ -33,7 +33,7 @@ export function Component() {
           else next.delete(name);
           return next;
         },
-        { replace: true },
+        { replace: true, flushSync: true },
       ),
     [setAddress],
   );

@@ -33,7 +33,7 @@ export function Component() {
           none="All"
           words={OUTBOX_STATE_WORDS}
           value={state ?? ''}
-          onChange={({ target }) => setAddress(target.value ? { state: target.value } : {})}
+          onChange={({ target }) => setAddress(target.value ? { state: target.value } : {}, { flushSync: true })}
         />
       </div>
       <Mails state={state} />

@@ -25,7 +25,7 @@ export function Component() {
                 label="Conference"
                 words={Object.fromEntries(memberships.map(({ conferenceId, conferenceName }) => [conferenceId, conferenceName]))}
                 value={chosen.conferenceId}
-                onChange={(event) => setSearch({ conference: event.target.value }, { replace: true })}
+                onChange={(event) => setSearch({ conference: event.target.value }, { replace: true, flushSync: true })}
               />
             </div>
           )}

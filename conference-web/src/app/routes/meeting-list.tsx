@@ -29,7 +29,7 @@ export function Component() {
             none="All of mine"
             words={Object.fromEntries(memberships.map(({ conferenceId, conferenceName }) => [conferenceId, conferenceName]))}
             value={chosen ?? ''}
-            onChange={({ target }) => setAddress(target.value ? { conference: target.value } : {}, { replace: true })}
+            onChange={({ target }) => setAddress(target.value ? { conference: target.value } : {}, { replace: true, flushSync: true })}
           />
         </div>
       )}

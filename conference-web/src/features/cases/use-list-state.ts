@@ -9,7 +9,8 @@ export function useListState() {
   const filter = useMemo(() => readListState(address), [address]);
   const change = useCallback(
     (changes: Partial<CaseListFilter>, options?: { replace?: boolean }) =>
-      setAddress((now) => writeListState({ ...readListState(now), ...changes }), options),
+      // at once, or the box that was ticked would first jump back
+      setAddress((now) => writeListState({ ...readListState(now), ...changes }), { flushSync: true, ...options }),
     [setAddress],
   );
   const sortBy = useCallback(

@@ -22,7 +22,7 @@ export function CompareVersions({ caseId, versions }: { caseId: string; versions
     setAddress((now) => {
       now.set(name, value);
       return now;
-    }, { replace: true });
+    }, { replace: true, flushSync: true });
   const words = Object.fromEntries(versions.map(({ version, at, author }) => [version, `${version}: ${formatDateTime(at)}, ${author.name}`]));
   const [older, newer] = from <= to ? [from, to] : [to, from];
   return (
