@@ -2,12 +2,15 @@ import { FileRefusal } from './file-refusal.js';
 
 /** Reads numbers and text out of bytes that may end anywhere: whatever lies outside is 'cut off'. */
 export class ByteReader {
+  /** Never Node's Buffer, whose slices are no copies. */
+  readonly bytes: Uint8Array;
   private readonly view: DataView;
 
   constructor(
-    readonly bytes: Uint8Array,
+    bytes: Uint8Array,
     readonly bigEndian = false,
   ) {
+    this.bytes = new Uint8Array(bytes.buffer, bytes.byteOffset, bytes.byteLength);
     this.view = new DataView(bytes.buffer, bytes.byteOffset, bytes.byteLength);
   }
 

@@ -12,7 +12,7 @@ export interface SizedParts {
 
 const SIGNATURE = '\x89PNG\r\n\x1a\n';
 /** PNG third edition 4.7: what makes the pixels and their colours; text, times, EXIF, profiles and films are not among them. */
-const NEEDED = new Set(['IHDR', 'PLTE', 'IDAT', 'IEND', 'tRNS', 'gAMA', 'cHRM', 'sRGB', 'sBIT', 'bKGD']);
+const NEEDED = new Set(['IHDR', 'PLTE', 'IDAT', 'IEND', 'tRNS', 'gAMA', 'cHRM', 'sRGB', 'sBIT', 'bKGD', 'pHYs']);
 const NAMES: Record<string, string> = {
   tEXt: 'tEXt (text)',
   zTXt: 'zTXt (packed text)',

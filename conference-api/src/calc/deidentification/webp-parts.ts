@@ -28,7 +28,7 @@ export function webpParts(bytes: Uint8Array): SizedParts {
   }
   if (at < bytes.length) found.parts.push({ name: 'bytes after the end of the picture', at, end: bytes.length, clean: 'drop' });
   if (found.width === 0) throw new FileRefusal('no-picture', 'The WebP file holds no picture.');
-  return { ...found, parts: [head(bytes, found.parts), ...found.parts] };
+  return { ...found, parts: [head(reader.bytes, found.parts), ...found.parts] };
 }
 
 function addChunk(found: SizedParts, reader: ByteReader, at: number, stop: number): number {

@@ -26,8 +26,7 @@ function secondReading(bytes: Uint8Array): CleanFault[] {
 
 function dcmjsTags(bytes: Uint8Array): string[] | null {
   try {
-    const copy = bytes.byteOffset === 0 && bytes.length === bytes.buffer.byteLength ? bytes.buffer : bytes.slice().buffer;
-    const { dict } = dcmjs.data.DicomMessage.readFile(copy as ArrayBuffer, { noCopy: true });
+    const { dict } = dcmjs.data.DicomMessage.readFile(new Uint8Array(bytes).buffer, { noCopy: true });
     return Object.keys(dict).map((tag) => tagText(parseInt(tag, 16)));
   } catch {
     return null;

@@ -5,6 +5,7 @@ import { join } from 'node:path';
 import { FileRefusal } from '@kerfside/calc/deidentification/file-refusal';
 import { profileCode } from '@kerfside/calc/deidentification/profile-table';
 import { UidMap } from '@kerfside/calc/deidentification/uid-map';
+import { inspectDicom } from '../../../../../conference-api/src/images/inspection/inspect-dicom.js';
 import { cleanDicom } from './clean-dicom.js';
 import type { CleanedFile } from './cleaned-file.js';
 import { dicomSamples, type Sample } from './testing/dicom-samples.js';
@@ -93,6 +94,11 @@ describe('the sample files', () => {
       expect(valueOf('0002,0003')).toEqual(valueOf('0008,0018'));
     }
   }, 60_000);
+
+  it('are taken by the server, which reads them twice', () => {
+    const faults = cleaned.flatMap(({ sample, file }) => inspectDicom(file.bytes).faults.map(({ place, why }) => `${sample.name}: ${place} ${why}`));
+    expect(faults).toEqual([]);
+  });
 
   it('hold none of the removed words anywhere in their bytes', () => {
     const left = cleaned.flatMap(({ sample, file }) => {
