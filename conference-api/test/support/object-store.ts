@@ -6,7 +6,7 @@ import { join } from 'node:path';
 export interface ObjectStore {
   /** What a test application has to be started with to use it. */
   environment: Record<string, string>;
-  behave: (mode: 'ok' | 'fail') => Promise<void>;
+  behave: (mode: 'ok' | 'fail' | 'delay', delayMs?: number) => Promise<void>;
   stop: () => Promise<void>;
   /** Again on the same port, with what it had. */
   start: () => Promise<void>;
@@ -31,8 +31,8 @@ export async function startObjectStore(limits: { maxObjectBytes?: number } = {})
       KERFSIDE_S3_ACCESS_KEY_ID: options.accessKeyId,
       KERFSIDE_S3_SECRET_ACCESS_KEY: options.secretAccessKey,
     },
-    behave: async (mode) => {
-      const response = await fetch(`http://127.0.0.1:${port}/__behaviour`, { method: 'PUT', headers: { 'content-type': 'application/json' }, body: JSON.stringify({ mode }) });
+    behave: async (mode, delayMs) => {
+      const response = await fetch(`http://127.0.0.1:${port}/__behaviour`, { method: 'PUT', headers: { 'content-type': 'application/json' }, body: JSON.stringify({ mode, delayMs }) });
       if (!response.ok) throw new Error(`behaviour answered ${response.status}`);
     },
     stop,
