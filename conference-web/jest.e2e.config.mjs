@@ -5,6 +5,8 @@ export default jestPreset({
   displayName: 'browser',
   testEnvironment: 'node',
   testMatch: ['<rootDir>/e2e/**/*.browser-spec.ts'],
-  testTimeout: 120_000,
+  // what they need of packages is CommonJS already
+  transformIgnorePatterns: ['/node_modules/'],
+  testTimeout: 240_000,
   maxWorkers: 1,
 });
