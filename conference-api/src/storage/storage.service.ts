@@ -36,7 +36,7 @@ export class StorageService implements OnApplicationShutdown {
       credentials: { accessKeyId, secretAccessKey },
       maxAttempts: 2,
       // without throwOnRequestTimeout the client would only warn, and wait on
-      requestHandler: { connectionTimeout: 2000, requestTimeout: 15000, throwOnRequestTimeout: true, socketTimeout: 15000 },
+      requestHandler: { connectionTimeout: 2_000, requestTimeout: 10_000, throwOnRequestTimeout: true, socketTimeout: 10_000 },
     });
   }
 
