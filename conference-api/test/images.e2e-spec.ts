@@ -180,7 +180,7 @@ describe('images', () => {
       ['no signature', (address: string) => address.split('&')[0]!, 422],
       ['a signature that is none', (address: string) => address.replace(/signature=\w+/, 'signature=zz'), 422],
       ['an unknown size', (address: string) => address.replace('/view', '/huge'), 404],
-      ['an id that is none', (address: string) => address.replace(/images\/[^/]+/, 'images/7'), 400],
+      ['an id that is none', (address: string) => address.replace(/images\/[^/]+/, 'images/7'), 404],
     ])('%s is refused', async (_, change, status) => {
       expect((await test.http().get(change(image.addresses.view))).status).toBe(status);
     });
