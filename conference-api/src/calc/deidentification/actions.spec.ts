@@ -21,7 +21,9 @@ describe('every row of the table', () => {
   });
 
   it('is replaced where a picture must have it: SOP instance, study, series, frame of reference', () => {
-    expect([...MAPPED_UIDS.keys()].map((tag) => [actionFor(tag, 'UI').does, profileCode(tag)])).toEqual(Array.from({ length: 4 }, () => ['replace', 'U']));
+    expect([...MAPPED_UIDS.keys()].map((tag) => [actionFor(tag, 'UI').does, profileCode(tag)])).toEqual(
+      Array.from({ length: 4 }, () => ['replace', 'U']),
+    );
   });
 });
 

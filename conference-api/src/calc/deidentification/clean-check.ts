@@ -32,7 +32,8 @@ export function cleanFaults(bytes: Uint8Array, confirmed = true): CleanFault[] {
   try {
     const meta = readMeta(bytes);
     if (bytes.subarray(0, 128).some((byte) => byte !== 0)) faults.push({ place: 'preamble', why: 'is not empty' });
-    if (!isCleanSyntax(meta.syntaxUid)) return [...faults, { place: tagText(0x00020010), why: `names an encoding that cleaning does not write: ${meta.syntax.name}` }];
+    if (!isCleanSyntax(meta.syntaxUid))
+      return [...faults, { place: tagText(0x00020010), why: `names an encoding that cleaning does not write: ${meta.syntax.name}` }];
     checkAll(faults, bytes, meta, confirmed);
   } catch (error) {
     if (!(error instanceof FileRefusal)) throw error;
@@ -54,7 +55,13 @@ function checkAll(faults: CleanFault[], bytes: Uint8Array, meta: DicomMeta, conf
   faults.push(...checkSamples(dataSet, meta.syntax));
 }
 
-function checkElements(faults: CleanFault[], dataSet: DicomDataSet, elements: DicomElement[], holders: number[], within: KeptAttributes | undefined): void {
+function checkElements(
+  faults: CleanFault[],
+  dataSet: DicomDataSet,
+  elements: DicomElement[],
+  holders: number[],
+  within: KeptAttributes | undefined,
+): void {
   let last = -1;
   for (const element of elements) {
     if (faults.length >= MOST_FAULTS) return;

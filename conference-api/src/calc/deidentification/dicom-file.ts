@@ -38,7 +38,8 @@ export const isDicom = (bytes: Uint8Array): boolean => bytes.length >= META_STAR
 export function readMeta(bytes: Uint8Array): DicomMeta {
   if (bytes.length === 0) throw new FileRefusal('empty', 'The file is empty.');
   if (bytes.length > MOST_BYTES) throw new FileRefusal('too-large', `The file is larger than ${MOST_BYTES / 1024 / 1024} MB.`);
-  if (!isDicom(bytes)) throw new FileRefusal('not-read', 'The file has no DICOM head, so nothing says how it is written. Export it again as a DICOM file.');
+  if (!isDicom(bytes))
+    throw new FileRefusal('not-read', 'The file has no DICOM head, so nothing says how it is written. Export it again as a DICOM file.');
   const walk = new DicomWalk(bytes, { explicit: true, bigEndian: false });
   const { elements, end } = walk.elements(META_START, bytes.length, (tag) => Math.floor(tag / 0x10000) === 2);
   const element = elements.find(({ tag }) => tag === TRANSFER_SYNTAX);
@@ -46,7 +47,10 @@ export function readMeta(bytes: Uint8Array): DicomMeta {
   if (!syntaxUid) throw new FileRefusal('broken', `The DICOM file does not say how its picture is written: ${tagText(TRANSFER_SYNTAX)} is missing.`);
   const syntax = TRANSFER_SYNTAXES.get(syntaxUid);
   if (!syntax)
-    throw new FileRefusal('not-read', `The picture is written in a way that is not read here (transfer syntax ${/^[\d.]{1,64}$/.test(syntaxUid) ? syntaxUid : 'unknown'}). Export it without compression.`);
+    throw new FileRefusal(
+      'not-read',
+      `The picture is written in a way that is not read here (transfer syntax ${/^[\d.]{1,64}$/.test(syntaxUid) ? syntaxUid : 'unknown'}). Export it without compression.`,
+    );
   return { elements, syntax, syntaxUid, end };
 }
 
@@ -69,5 +73,8 @@ const nested = [...KEPT.values()].flatMap(({ items }) => (items ? [items] : []))
 /** Text without the padding that makes its length even. */
 export function textOf(bytes: Uint8Array, element: DicomElement): string {
   const reader = new ByteReader(bytes);
-  return reader.latin(element.value, Math.min(element.end, element.value + 1024)).replace(/[\0 ]+$/, '').trim();
+  return reader
+    .latin(element.value, Math.min(element.end, element.value + 1024))
+    .replace(/[\0 ]+$/, '')
+    .trim();
 }

@@ -9,7 +9,29 @@ const ITEM_END = 0xfffee00d;
 const SEQUENCE_END = 0xfffee0dd;
 // PS3.5 table 7.1-1: two reserved bytes and a length of four bytes
 const LONG_VRS = new Set(['OB', 'OD', 'OF', 'OL', 'OV', 'OW', 'SQ', 'SV', 'UC', 'UN', 'UR', 'UT', 'UV']);
-const SHORT_VRS = new Set(['AE', 'AS', 'AT', 'CS', 'DA', 'DS', 'DT', 'FD', 'FL', 'IS', 'LO', 'LT', 'PN', 'SH', 'SL', 'SS', 'ST', 'TM', 'UI', 'UL', 'US']);
+const SHORT_VRS = new Set([
+  'AE',
+  'AS',
+  'AT',
+  'CS',
+  'DA',
+  'DS',
+  'DT',
+  'FD',
+  'FL',
+  'IS',
+  'LO',
+  'LT',
+  'PN',
+  'SH',
+  'SL',
+  'SS',
+  'ST',
+  'TM',
+  'UI',
+  'UL',
+  'US',
+]);
 const PIXEL_VRS = new Set(['OB', 'OW']);
 
 export interface WalkedElements {
@@ -80,8 +102,7 @@ export class DicomWalk {
     }
     if (PIXEL_VRS.has(head.vr)) return { ...head, at, ...this.pieces(head.value, end, head.tag) };
     // PS3.5 6.2.2: unknown contents of undefined length are implicit little endian
-    const inside =
-      head.vr === 'UN' ? new DicomWalk(this.reader.bytes, { explicit: false, bigEndian: false }, this.isSequence, this.limits) : this;
+    const inside = head.vr === 'UN' ? new DicomWalk(this.reader.bytes, { explicit: false, bigEndian: false }, this.isSequence, this.limits) : this;
     if (head.vr !== 'SQ' && head.vr !== 'UN' && head.vr !== '') throw broken(head.tag, 'has no length');
     const { items, end: after } = inside.items(head.value, end, depth + 1, head.tag, true);
     return { tag: head.tag, vr: head.vr, at, value: head.value, end: after, items };

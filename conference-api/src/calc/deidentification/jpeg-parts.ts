@@ -33,7 +33,8 @@ export function jpegParts(bytes: Uint8Array): JpegParts {
   while (found.parts.length < MOST_PARTS) {
     const marker = markerAt(reader, at);
     if (marker.code === EOI) return closed(found, bytes, at, marker.value);
-    if (marker.code === SOI || marker.code < 0xc0) throw new FileRefusal('broken', `The JPEG picture is broken: the mark FF${hex(marker.code)} stands in a wrong place.`);
+    if (marker.code === SOI || marker.code < 0xc0)
+      throw new FileRefusal('broken', `The JPEG picture is broken: the mark FF${hex(marker.code)} stands in a wrong place.`);
     const end = marker.value + segmentLength(reader, marker.value);
     readSize(found, reader, marker.code, marker.value);
     const stop = marker.code === SOS ? scanEnd(bytes, end) : end;

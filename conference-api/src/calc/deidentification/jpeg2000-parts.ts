@@ -74,7 +74,12 @@ function addSegment(found: Jpeg2000Parts, reader: ByteReader, at: number, code: 
     found.height = reader.u32be(at + 10) - reader.u32be(at + 18);
   }
   const isBlank = code !== COM || reader.span(at + 4, end).every((byte) => byte === 0);
-  found.parts.push({ name: code === COM ? 'COM (comment)' : code.toString(16).toUpperCase(), at, end, clean: isBlank ? 'keep' : blanked(reader, at, end) });
+  found.parts.push({
+    name: code === COM ? 'COM (comment)' : code.toString(16).toUpperCase(),
+    at,
+    end,
+    clean: isBlank ? 'keep' : blanked(reader, at, end),
+  });
   return end;
 }
 

@@ -22,12 +22,44 @@ export const VIEW_POSITIONS = [
 ];
 
 /** PS3.3 C.7.3.1.1.2. */
-export const PATIENT_POSITIONS = ['HFP', 'HFS', 'HFDR', 'HFDL', 'FFDR', 'FFDL', 'FFP', 'FFS', 'LFP', 'LFS', 'RFP', 'RFS', 'AFDR', 'AFDL', 'PFDR', 'PFDL'];
+export const PATIENT_POSITIONS = [
+  'HFP',
+  'HFS',
+  'HFDR',
+  'HFDL',
+  'FFDR',
+  'FFDL',
+  'FFP',
+  'FFS',
+  'LFP',
+  'LFS',
+  'RFP',
+  'RFS',
+  'AFDR',
+  'AFDL',
+  'PFDR',
+  'PFDL',
+];
 
 /** Third and later values of Image Type: PS3.3 C.8.2.1, C.8.3.1, C.8.16.1 and the like. */
 export const IMAGE_TYPES = [
   ...['AXIAL', 'LOCALIZER', 'SCOUT', 'MPR', 'REFORMATTED', 'PROJECTION IMAGE', 'RESAMPLED', 'VOLUME', 'MIN_IP', 'MAX_IP', 'AVERAGE', 'NONE'],
-  ...['M_SE', 'M_FFE', 'MPR', 'OTHER', 'SINGLE PLANE', 'BIPLANE A', 'BIPLANE B', 'SINGLE A', 'SINGLE B', 'MIXED', 'T1', 'T2', 'STIR', 'PROTON_DENSITY'],
+  ...[
+    'M_SE',
+    'M_FFE',
+    'MPR',
+    'OTHER',
+    'SINGLE PLANE',
+    'BIPLANE A',
+    'BIPLANE B',
+    'SINGLE A',
+    'SINGLE B',
+    'MIXED',
+    'T1',
+    'T2',
+    'STIR',
+    'PROTON_DENSITY',
+  ],
 ];
 
 /** PS3.3 C.11.1.1.2 and C.7.6.16.2.9. */

@@ -20,7 +20,8 @@ export function checkMeta(bytes: Uint8Array, { elements, syntaxUid }: DicomMeta,
   ]);
   const tags = [...expected.keys()];
   return elements.flatMap((element, i) => {
-    const why = element.tag === tags[i] ? checkHead(bytes, element, expected.get(element.tag)!) : 'is not one of the head of a clean file, or in a wrong place';
+    const why =
+      element.tag === tags[i] ? checkHead(bytes, element, expected.get(element.tag)!) : 'is not one of the head of a clean file, or in a wrong place';
     return why ? [{ place: tagText(element.tag), why }] : [];
   });
 }

@@ -41,7 +41,9 @@ function checkCodes({ bytes, elements }: DicomDataSet, { items }: DicomElement):
     [METHOD_CODE_TAGS.meaning, meaning],
   ]);
   const found = items?.map((item) => item.map((element) => [element.tag, element.items ? '' : textOf(bytes, element)]));
-  return JSON.stringify(found) === JSON.stringify(expected) ? null : `does not name ${methods.map(({ value }) => value).join(' and ')}, and nothing else`;
+  return JSON.stringify(found) === JSON.stringify(expected)
+    ? null
+    : `does not name ${methods.map(({ value }) => value).join(' and ')}, and nothing else`;
 }
 
 /** What every clean file says, and what is not there; text in the picture only where a person looked for it. */

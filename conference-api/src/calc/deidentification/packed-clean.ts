@@ -22,7 +22,10 @@ export function cleanFrame(frame: Uint8Array, packing: Packing, facts: PictureFa
   if (packing === 'rle') return { bytes: frame, removed: checkRle(frame), wasClean: true };
   const { parts, width, height } = packing === 'jpeg' ? jpegParts(frame) : jpeg2000Parts(frame);
   if (width !== facts.columns || (height !== facts.rows && height !== 0))
-    throw new FileRefusal('broken', `The DICOM file is broken: it says ${facts.columns} × ${facts.rows} pixels, and its picture ${width} × ${height}.`);
+    throw new FileRefusal(
+      'broken',
+      `The DICOM file is broken: it says ${facts.columns} × ${facts.rows} pixels, and its picture ${width} × ${height}.`,
+    );
   const kept = parts.filter((part, i) => !isPadding(frame, part, i === parts.length - 1));
   return { bytes: joinParts(frame, kept), removed: kept.filter(({ clean }) => clean !== 'keep').map(({ name }) => name), wasClean: isClean(kept) };
 }

@@ -8,10 +8,19 @@ import { cleanPictureBytes } from './picture-clean.js';
 const WIDTH = 40;
 const HEIGHT = 24;
 const PIXELS = Buffer.from(Array.from({ length: WIDTH * HEIGHT * 3 }, (_, i) => (i * 37 + (i >> 5) * 11) % 256));
-const EXIF = { IFD0: { Artist: 'Planted Person', Copyright: 'Planted Hospital' }, IFD2: { UserComment: 'Planted' }, IFD3: { GPSLatitudeRef: 'N', GPSLatitude: '51/1 30/1 0/1' } };
-const XMP = '<x:xmpmeta xmlns:x="adobe:ns:meta/"><rdf:RDF xmlns:rdf="http://www.w3.org/1999/02/22-rdf-syntax-ns#"><rdf:Description>Planted</rdf:Description></rdf:RDF></x:xmpmeta>';
+const EXIF = {
+  IFD0: { Artist: 'Planted Person', Copyright: 'Planted Hospital' },
+  IFD2: { UserComment: 'Planted' },
+  IFD3: { GPSLatitudeRef: 'N', GPSLatitude: '51/1 30/1 0/1' },
+};
+const XMP =
+  '<x:xmpmeta xmlns:x="adobe:ns:meta/"><rdf:RDF xmlns:rdf="http://www.w3.org/1999/02/22-rdf-syntax-ns#"><rdf:Description>Planted</rdf:Description></rdf:RDF></x:xmpmeta>';
 
-const full = () => sharp(PIXELS, { raw: { width: WIDTH, height: HEIGHT, channels: 3 } }).withExif(EXIF).withXmp(XMP).withIccProfile('p3');
+const full = () =>
+  sharp(PIXELS, { raw: { width: WIDTH, height: HEIGHT, channels: 3 } })
+    .withExif(EXIF)
+    .withXmp(XMP)
+    .withIccProfile('p3');
 const written: Record<string, () => Promise<Buffer>> = {
   jpeg: () => full().jpeg({ quality: 90 }).toBuffer(),
   'progressive jpeg': () => full().jpeg({ progressive: true }).toBuffer(),
@@ -110,9 +119,13 @@ it.each([
 
 describe('is refused with the reason', () => {
   it('that a file holds several pictures', async () => {
-    const film = await sharp(PIXELS, { raw: { width: WIDTH, height: HEIGHT, channels: 3, pageHeight: HEIGHT / 2 } }).webp({ loop: 1, delay: 100 }).toBuffer();
+    const film = await sharp(PIXELS, { raw: { width: WIDTH, height: HEIGHT, channels: 3, pageHeight: HEIGHT / 2 } })
+      .webp({ loop: 1, delay: 100 })
+      .toBuffer();
     expect(() => cleanPictureBytes(film)).toThrow(/WebP file holds several pictures/);
-    const pages = await sharp([await full().png().toBuffer(), await full().png().toBuffer()], { join: { animated: true } }).tiff().toBuffer();
+    const pages = await sharp([await full().png().toBuffer(), await full().png().toBuffer()], { join: { animated: true } })
+      .tiff()
+      .toBuffer();
     expect(() => cleanPictureBytes(pages)).toThrow(/TIFF file holds several pictures/);
   });
 
@@ -162,14 +175,20 @@ describe('hostile pictures', () => {
   });
 
   it('are borne, wherever they end', () => {
-    for (const sample of samples) for (let length = 0; length < sample.length; length += 1 + (length >> 6)) cleanedOrRefused(sample.subarray(0, length));
+    for (const sample of samples)
+      for (let length = 0; length < sample.length; length += 1 + (length >> 6)) cleanedOrRefused(sample.subarray(0, length));
   });
 
   it('do not grow by strips that lie over one another', () => {
     // TIFF 6.0: 100 000 strips, each the whole file
     const count = 100_000;
     const head = Buffer.from('49492a0008000000', 'hex');
-    const entries = [[256, 3, 1, 8], [257, 3, 1, 8], [273, 4, count, 100], [279, 4, count, 100]].map(([tag, type, n, value]) => {
+    const entries = [
+      [256, 3, 1, 8],
+      [257, 3, 1, 8],
+      [273, 4, count, 100],
+      [279, 4, count, 100],
+    ].map(([tag, type, n, value]) => {
       const entry = Buffer.alloc(12);
       entry.writeUInt16LE(tag!, 0);
       entry.writeUInt16LE(type!, 2);

@@ -50,7 +50,8 @@ export function cleanPictureBytes(bytes: Uint8Array): CleanedPicture {
   const kind = pictureKind(bytes);
   if (!kind) throw new FileRefusal('not-read', 'The file is no JPEG, PNG, WebP or TIFF picture, whatever its name says.');
   const cleaned = kind === 'tiff' ? ofTiff(bytes) : ofParts(kind, bytes, PARTS[kind](bytes));
-  if (cleaned.width * cleaned.height > MOST_PIXELS) throw new FileRefusal('too-large', `The picture has more than ${MOST_PIXELS / 1e6} million pixels. Export it smaller.`);
+  if (cleaned.width * cleaned.height > MOST_PIXELS)
+    throw new FileRefusal('too-large', `The picture has more than ${MOST_PIXELS / 1e6} million pixels. Export it smaller.`);
   return cleaned;
 }
 
@@ -74,7 +75,10 @@ function ofParts(kind: PictureKind, bytes: Uint8Array, { parts, width, height, e
 function shownPart(bytes: Uint8Array, { name, at, end }: FilePart): string {
   if (!/text|comment|XMP/i.test(name)) return `${end - at} bytes`;
   const text = new ByteReader(bytes).latin(at, Math.min(end, at + 4 * LONGEST_SHOWN));
-  return text.replace(/[^ -~]+/g, ' ').trim().slice(0, LONGEST_SHOWN);
+  return text
+    .replace(/[^ -~]+/g, ' ')
+    .trim()
+    .slice(0, LONGEST_SHOWN);
 }
 
 function ofTiff(bytes: Uint8Array): CleanedPicture {
@@ -82,6 +86,7 @@ function ofTiff(bytes: Uint8Array): CleanedPicture {
   const dropped = new Set(clean.dropped.map(({ tag }) => tag));
   const removed = exifFindings(bytes, (tag) => !dropped.has(tag)).found.map(({ name, was }) => ({ name: `TIFF ${name}`, was }));
   const wasClean = clean.bytes.length === bytes.length && clean.bytes.every((byte, i) => byte === bytes[i]);
-  if (!wasClean && removed.length === 0) removed.push({ name: 'bytes that belong to no part of the picture', was: `${Math.max(0, bytes.length - clean.bytes.length)} bytes` });
+  if (!wasClean && removed.length === 0)
+    removed.push({ name: 'bytes that belong to no part of the picture', was: `${Math.max(0, bytes.length - clean.bytes.length)} bytes` });
   return { kind: 'tiff', bytes: clean.bytes, removed, wasClean, orientation: 1, width: clean.width, height: clean.height };
 }

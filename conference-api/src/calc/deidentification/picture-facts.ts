@@ -33,12 +33,18 @@ export function pictureFacts(dataSet: DicomDataSet): PictureFacts {
     frames: Number(valueOf(dataSet, FRAMES) ?? 1),
   };
   const { rows, columns, samples, photometric, bitsAllocated, frames } = facts;
-  if (rows * columns > MOST_PIXELS) throw new FileRefusal('too-large', `The picture has more than ${MOST_PIXELS / 1e6} million pixels. Export it smaller.`);
-  if (!Number.isInteger(frames) || frames < 1) throw new FileRefusal('broken', `The DICOM file is broken: ${tagText(FRAMES)} names no number of pictures.`);
+  if (rows * columns > MOST_PIXELS)
+    throw new FileRefusal('too-large', `The picture has more than ${MOST_PIXELS / 1e6} million pixels. Export it smaller.`);
+  if (!Number.isInteger(frames) || frames < 1)
+    throw new FileRefusal('broken', `The DICOM file is broken: ${tagText(FRAMES)} names no number of pictures.`);
   if (frames > MOST_FRAMES) throw new FileRefusal('too-large', `The DICOM file says that it holds ${frames} pictures; ${MOST_FRAMES} are the most.`);
   if (!isKnown(BITS, bitsAllocated) || !isKnown(SAMPLES, samples))
     throw new FileRefusal('not-read', `Pictures with ${samples} samples of ${bitsAllocated} bits are not read here.`);
-  if (!isKnown(PHOTOMETRIC, photometric)) throw new FileRefusal('not-read', `Pictures of this kind are not read here: ${tagText(PHOTOMETRIC)} Photometric Interpretation names one that is not known.`);
+  if (!isKnown(PHOTOMETRIC, photometric))
+    throw new FileRefusal(
+      'not-read',
+      `Pictures of this kind are not read here: ${tagText(PHOTOMETRIC)} Photometric Interpretation names one that is not known.`,
+    );
   return facts;
 }
 

@@ -19,7 +19,10 @@ function turned(orientation: number) {
 
 // the reader from outside: sharp (libvips), which turns by the EXIF tag that it wrote itself
 it.each([1, 2, 3, 4, 5, 6, 7, 8])('turns a picture with the EXIF orientation %s as sharp does', async (orientation) => {
-  const lying = await sharp(Buffer.from(PIXELS), { raw: { width: WIDTH, height: HEIGHT, channels: 1 } }).withMetadata({ orientation }).png().toBuffer();
+  const lying = await sharp(Buffer.from(PIXELS), { raw: { width: WIDTH, height: HEIGHT, channels: 1 } })
+    .withMetadata({ orientation })
+    .png()
+    .toBuffer();
   const { data, info } = await sharp(lying).rotate().toColourspace('b-w').raw().toBuffer({ resolveWithObject: true });
   expect(turned(orientation)).toEqual({ drawn: [...data], width: info.width, height: info.height });
 });

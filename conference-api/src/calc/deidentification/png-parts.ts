@@ -29,7 +29,12 @@ export function pngParts(bytes: Uint8Array): SizedParts {
   const reader = new ByteReader(bytes);
   if (bytes.length < 33 || reader.latin(0, 8) !== SIGNATURE || reader.latin(12, 16) !== 'IHDR')
     throw new FileRefusal(bytes.length < 33 ? 'cut-off' : 'broken', 'The PNG picture is broken or cut off: it does not begin as one.');
-  const found: SizedParts = { parts: [{ name: 'signature', at: 0, end: 8, clean: 'keep' }], width: reader.u32be(16), height: reader.u32be(20), exif: null };
+  const found: SizedParts = {
+    parts: [{ name: 'signature', at: 0, end: 8, clean: 'keep' }],
+    width: reader.u32be(16),
+    height: reader.u32be(20),
+    exif: null,
+  };
   let at = 8;
   while (found.parts.length < MOST_PARTS) {
     const end = at + 12 + reader.u32be(at);

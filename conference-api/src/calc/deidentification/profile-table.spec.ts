@@ -35,7 +35,10 @@ describe('the Basic Profile column', () => {
   });
 
   // the same source: not in the table, so left as they are
-  it.each([0x00080016, 0x00280301, 0x00280010, 0x00280011, 0x00181164, 0x00280030, 0x00120062, 0x00081115, 0x00181250])('has no row for %s', (tag) => {
-    expect(profileCode(tag)).toBeNull();
-  });
+  it.each([0x00080016, 0x00280301, 0x00280010, 0x00280011, 0x00181164, 0x00280030, 0x00120062, 0x00081115, 0x00181250])(
+    'has no row for %s',
+    (tag) => {
+      expect(profileCode(tag)).toBeNull();
+    },
+  );
 });

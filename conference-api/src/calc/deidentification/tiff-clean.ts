@@ -66,7 +66,8 @@ function stripsOf(reader: ByteReader, { entries }: TiffDirectory): Uint8Array[] 
   }) as [number[], number[]];
   if (offsets.length !== lengths.length) throw new FileRefusal('broken', 'The TIFF file is broken: its strips have no lengths.');
   // strips that lie over one another would let a small file grow without end
-  if (lengths.reduce((sum, length) => sum + length, 0) > reader.length) throw new FileRefusal('cut-off', 'The TIFF picture is cut off: a part of it is missing.');
+  if (lengths.reduce((sum, length) => sum + length, 0) > reader.length)
+    throw new FileRefusal('cut-off', 'The TIFF picture is cut off: a part of it is missing.');
   return offsets.map((at, i) => reader.span(at, at + lengths[i]!));
 }
 

@@ -61,6 +61,7 @@ export function tiffNumbers(reader: ByteReader, { type, count, at }: TiffEntry, 
   if (count > most) throw new FileRefusal('too-large', 'The TIFF data have more strips than are taken.');
   const width = WIDTHS[type]!;
   const numbers: number[] = [];
-  for (let i = 0; i < count; i++) numbers.push(type === 3 ? reader.u16(at + i * width) : type === 4 ? reader.u32(at + i * width) : reader.u8(at + i * width));
+  for (let i = 0; i < count; i++)
+    numbers.push(type === 3 ? reader.u16(at + i * width) : type === 4 ? reader.u32(at + i * width) : reader.u8(at + i * width));
   return numbers;
 }

@@ -9,7 +9,13 @@ export interface TransferSyntax {
   deflated: boolean;
 }
 
-const plain = (name: string, explicit = true, bigEndian = false, deflated = false): TransferSyntax => ({ name, packing: 'plain', explicit, bigEndian, deflated });
+const plain = (name: string, explicit = true, bigEndian = false, deflated = false): TransferSyntax => ({
+  name,
+  packing: 'plain',
+  explicit,
+  bigEndian,
+  deflated,
+});
 const packed = (name: string, packing: Packing): TransferSyntax => ({ name, packing, explicit: true, bigEndian: false, deflated: false });
 
 export const EXPLICIT_LITTLE = '1.2.840.10008.1.2.1';

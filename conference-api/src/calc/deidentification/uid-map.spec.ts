@@ -31,7 +31,14 @@ it('makes UIDs of the standard, out of version 4 UUIDs (RFC 9562 5.4)', () => {
 it('knows the form', () => {
   expect(isMappedUid('2.25.329800735698586629295641978511506172918')).toBe(true);
   expect(BigInt('0xf81d4fae7dec11d0a76500a0c91e6bf6').toString()).toBe('329800735698586629295641978511506172918');
-  expect(['2.25.0123', '2.25.', '2.25.1.2', '1.2.840.113619.2.1', `2.25.${2n ** 128n}`, '2.25.1 '].map(isMappedUid)).toEqual([false, false, false, false, false, false]);
+  expect(['2.25.0123', '2.25.', '2.25.1.2', '1.2.840.113619.2.1', `2.25.${2n ** 128n}`, '2.25.1 '].map(isMappedUid)).toEqual([
+    false,
+    false,
+    false,
+    false,
+    false,
+    false,
+  ]);
 });
 
 it('goes on where an earlier file of the upload ended', () => {

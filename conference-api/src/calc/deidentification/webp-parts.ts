@@ -6,7 +6,7 @@ import type { SizedParts } from './png-parts.js';
 
 const HEAD = 12;
 const NEEDED = new Set(['VP8 ', 'VP8L', 'ALPH']);
-const NAMES: Record<string, string> = { 'EXIF': 'EXIF', 'XMP ': 'XMP', 'ICCP': 'ICCP (colour profile)' };
+const NAMES: Record<string, string> = { EXIF: 'EXIF', 'XMP ': 'XMP', ICCP: 'ICCP (colour profile)' };
 /** RFC 9649 2.7: the flag of an alpha channel; the others announce profiles, EXIF, XMP and films. */
 const ALPHA = 0x10;
 
@@ -36,7 +36,8 @@ function addChunk(found: SizedParts, reader: ByteReader, at: number, stop: numbe
   const length = reader.u32(at + 4);
   if (at + 8 + length > stop) throw new FileRefusal('cut-off', 'The WebP picture is cut off: a part of it is missing.');
   const end = Math.min(stop, at + 8 + length + (length % 2));
-  if (type === 'ANIM' || type === 'ANMF') throw new FileRefusal('several-pictures', 'The WebP file holds several pictures; save the one that is needed.');
+  if (type === 'ANIM' || type === 'ANMF')
+    throw new FileRefusal('several-pictures', 'The WebP file holds several pictures; save the one that is needed.');
   if (type === 'EXIF') found.exif = exifOf(reader, at + 8, at + 8 + length);
   readSize(found, reader, type, at + 8, length);
   const isSecond = found.parts.some(({ name }) => name === type);

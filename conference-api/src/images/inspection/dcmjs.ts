@@ -5,7 +5,10 @@ import { join } from 'node:path';
 interface Dcmjs {
   data: {
     DicomMessage: {
-      readFile(bytes: ArrayBuffer, options?: { noCopy?: boolean; ignoreErrors?: boolean }): { meta: Record<string, unknown>; dict: Record<string, unknown> };
+      readFile(
+        bytes: ArrayBuffer,
+        options?: { noCopy?: boolean; ignoreErrors?: boolean },
+      ): { meta: Record<string, unknown>; dict: Record<string, unknown> };
     };
     DicomMetaDictionary: { dictionary: Record<string, { name: string } | undefined> };
   };

@@ -11,14 +11,16 @@ const LONG = ['OB', 'OW', 'SQ', 'UN', 'UT'];
 
 /** Explicit VR Little Endian (PS3.5 7.1.2), in the order that is given. */
 function write(rows: Written[]): Buffer {
-  return Buffer.concat(rows.map(([tag, vr, value]) => {
-    const content = Array.isArray(value) ? Buffer.concat(value.map((item) => headed('feff00e0', write(item)))) : padded(value, vr);
-    const head = Buffer.from([tag.slice(2, 4), tag.slice(0, 2), tag.slice(6), tag.slice(4, 6)].join(''), 'hex');
-    const length = Buffer.alloc(LONG.includes(vr) ? 6 : 2);
-    if (LONG.includes(vr)) length.writeUInt32LE(content.length, 2);
-    else length.writeUInt16LE(content.length);
-    return Buffer.concat([head, Buffer.from(vr), length, content]);
-  }));
+  return Buffer.concat(
+    rows.map(([tag, vr, value]) => {
+      const content = Array.isArray(value) ? Buffer.concat(value.map((item) => headed('feff00e0', write(item)))) : padded(value, vr);
+      const head = Buffer.from([tag.slice(2, 4), tag.slice(0, 2), tag.slice(6), tag.slice(4, 6)].join(''), 'hex');
+      const length = Buffer.alloc(LONG.includes(vr) ? 6 : 2);
+      if (LONG.includes(vr)) length.writeUInt32LE(content.length, 2);
+      else length.writeUInt16LE(content.length);
+      return Buffer.concat([head, Buffer.from(vr), length, content]);
+    }),
+  );
 }
 
 function headed(head: string, content: Buffer): Buffer {
@@ -35,7 +37,11 @@ const padded = (value: string | Buffer, vr: string) => {
 const us = (n: number) => Buffer.from([n & 255, n >> 8]);
 const UID = '2.25.329800735698586629295641978511506172918';
 const CR = '1.2.840.10008.5.1.4.1.1.1';
-const code = (value: string, meaning: string): Written[] => [['00080100', 'SH', value], ['00080102', 'SH', 'DCM'], ['00080104', 'LO', meaning]];
+const code = (value: string, meaning: string): Written[] => [
+  ['00080100', 'SH', value],
+  ['00080102', 'SH', 'DCM'],
+  ['00080104', 'LO', meaning],
+];
 
 /** PS3.16 CID 7050. */
 const METHODS = [code('113100', 'Basic Application Confidentiality Profile'), code('113101', 'Clean Pixel Data Option')];
@@ -54,7 +60,11 @@ const DATA: Written[] = [
   ['00080018', 'UI', UID],
   ...['00080020 DA', '00080030 TM', '00080050 SH'].map((row): Written => [row.slice(0, 8), row.slice(9), '']),
   ['00080060', 'CS', 'CR'],
-  ...['00080070 LO', '00080090 PN', '00100010 PN', '00100020 LO', '00100030 DA', '00100040 CS'].map((row): Written => [row.slice(0, 8), row.slice(9), '']),
+  ...['00080070 LO', '00080090 PN', '00100010 PN', '00100020 LO', '00100030 DA', '00100040 CS'].map((row): Written => [
+    row.slice(0, 8),
+    row.slice(9),
+    '',
+  ]),
   ['00120062', 'CS', 'YES'],
   ['00120063', 'LO', 'DICOM PS3.15 2024b, Table E.1-1, allow-list'],
   ['00120064', 'SQ', METHODS],
@@ -108,10 +118,22 @@ describe('names what a clean file may not hold', () => {
     ['a name in the part of the body', '(0018,0015) holds a value that is not on its list', file(changed(['00180015', 'CS', 'PLANTED']))],
     ['text in a number', '(0018,1164) holds a value that is not on its list', file(changed(['00181164', 'DS', 'Planted']))],
     ['a sequence', '(0008,1140) identifies somebody', file(changed(nested([['00100010', 'PN', 'Planted']])))],
-    ['a name in a sequence that is kept', '(0028,3010) (0010,0010) identifies somebody', file(changed(['00283010', 'SQ', [[['00100010', 'PN', 'Planted']]]]))],
-    ['a report', '(0008,0016) says that the file holds a report (Structured Report)', file(changed(['00080016', 'UI', '1.2.840.10008.5.1.4.1.1.88.22']))],
+    [
+      'a name in a sequence that is kept',
+      '(0028,3010) (0010,0010) identifies somebody',
+      file(changed(['00283010', 'SQ', [[['00100010', 'PN', 'Planted']]]])),
+    ],
+    [
+      'a report',
+      '(0008,0016) says that the file holds a report (Structured Report)',
+      file(changed(['00080016', 'UI', '1.2.840.10008.5.1.4.1.1.88.22'])),
+    ],
     ['a PDF', '(0008,0016) says that the file holds a PDF document', file(changed(['00080016', 'UI', '1.2.840.10008.5.1.4.1.1.104.1']))],
-    ['a waveform', '(0008,0016) says that the file holds a waveform, such as an ECG', file(changed(['00080016', 'UI', '1.2.840.10008.5.1.4.1.1.9.1.1']))],
+    [
+      'a waveform',
+      '(0008,0016) says that the file holds a waveform, such as an ECG',
+      file(changed(['00080016', 'UI', '1.2.840.10008.5.1.4.1.1.9.1.1'])),
+    ],
     ['text in the picture', '(0028,0301) does not say that a person found no text', file(changed(['00280301', 'CS', 'YES']))],
     ['nothing about text in the picture', '(0028,0301) is missing', file(without('00280301'))],
     ['no method', '(0012,0064) does not name 113100 and 113101', file(changed(['00120064', 'SQ', METHODS.slice(0, 1)]))],
@@ -121,16 +143,37 @@ describe('names what a clean file may not hold', () => {
     ['a sender in the head', '(0002,0016) is not one of the head', file(DATA, [...META, ['00020016', 'AE', 'PLANTED']])],
     ['another version in the head', '(0002,0013) is not as cleaning writes it', file(DATA, [...META.slice(0, 5), ['00020013', 'SH', 'PLANTED']])],
     ['bytes after the end', 'file holds 7 bytes after its last attribute', Buffer.concat([file(), Buffer.from('Planted')])],
-    ['an attribute twice', '(0008,0060) does not stand in its order, or twice', file([...DATA.slice(0, 6), ['00080060', 'CS', 'CR'], ...DATA.slice(6)])],
-    ['a deflated file', '(0002,0010) names an encoding that cleaning does not write', file(DATA, META.map((row) => (row[0] === '00020010' ? ['00020010', 'UI', '1.2.840.10008.1.2.1.99'] : row)))],
+    [
+      'an attribute twice',
+      '(0008,0060) does not stand in its order, or twice',
+      file([...DATA.slice(0, 6), ['00080060', 'CS', 'CR'], ...DATA.slice(6)]),
+    ],
+    [
+      'a deflated file',
+      '(0002,0010) names an encoding that cleaning does not write',
+      file(
+        DATA,
+        META.map((row) => (row[0] === '00020010' ? ['00020010', 'UI', '1.2.840.10008.1.2.1.99'] : row)),
+      ),
+    ],
     ['a million frames', 'file The DICOM file says that it holds 999999 pictures', file(changed(['00280008', 'IS', '999999']))],
-    ['huge dimensions', 'file The picture has more than 60 million pixels', file(changed(['00280010', 'US', us(65535)], ['00280011', 'US', us(65535)]))],
+    [
+      'huge dimensions',
+      'file The picture has more than 60 million pixels',
+      file(changed(['00280010', 'US', us(65535)], ['00280011', 'US', us(65535)])),
+    ],
   ])('%s', (_, fault, bytes) => {
     expect(faultsOf(bytes)).toEqual(expect.arrayContaining([expect.stringContaining(fault)]));
   });
 
   it('and never a value', () => {
-    const planted = changed(['00100010', 'PN', 'Planted^Name'], ['00090010', 'LO', 'Planted'], ['00180015', 'CS', 'PLANTED'], ['00080016', 'UI', '1.2.3.PLANTED'], ['00280004', 'CS', 'PLANTED']);
+    const planted = changed(
+      ['00100010', 'PN', 'Planted^Name'],
+      ['00090010', 'LO', 'Planted'],
+      ['00180015', 'CS', 'PLANTED'],
+      ['00080016', 'UI', '1.2.3.PLANTED'],
+      ['00280004', 'CS', 'PLANTED'],
+    );
     expect(JSON.stringify(inspectDicom(file(planted)))).not.toMatch(/planted/i);
   });
 
@@ -141,7 +184,10 @@ describe('names what a clean file may not hold', () => {
 
 /** Files that nobody here wrote: those of Debian's python3-pydicom. */
 describe('the sample files', () => {
-  const filesBelow = (folder: string): string[] => readdirSync(folder).sort().flatMap((name) => (statSync(join(folder, name)).isDirectory() ? filesBelow(join(folder, name)) : [join(folder, name)]));
+  const filesBelow = (folder: string): string[] =>
+    readdirSync(folder)
+      .sort()
+      .flatMap((name) => (statSync(join(folder, name)).isDirectory() ? filesBelow(join(folder, name)) : [join(folder, name)]));
   const samples = filesBelow('/usr/lib/python3/dist-packages/pydicom/data').map((path) => ({ path, bytes: new Uint8Array(readFileSync(path)) }));
   const inspectedInTime = (bytes: Uint8Array) => {
     const began = performance.now();
@@ -158,11 +204,16 @@ describe('the sample files', () => {
   it('are borne, wherever bytes are changed or they end', () => {
     const change = fc.record({ place: fc.double({ min: 0, max: 1, noNaN: true }), byte: fc.constantFrom(0, 1, 0x7f, 0xfe, 0xff) });
     fc.assert(
-      fc.property(fc.constantFrom(...samples, { path: 'clean', bytes: new Uint8Array(file()) }), fc.array(change, { minLength: 1, maxLength: 10 }), fc.double({ min: 0, max: 1, noNaN: true }), ({ bytes }, changes, kept) => {
-        const copy = bytes.slice(0, kept > 0.5 ? bytes.length : Math.floor(bytes.length * kept));
-        for (const { place, byte } of changes) if (copy.length > 0) copy[Math.min(copy.length - 1, Math.floor(place * copy.length))] = byte;
-        inspectedInTime(copy);
-      }),
+      fc.property(
+        fc.constantFrom(...samples, { path: 'clean', bytes: new Uint8Array(file()) }),
+        fc.array(change, { minLength: 1, maxLength: 10 }),
+        fc.double({ min: 0, max: 1, noNaN: true }),
+        ({ bytes }, changes, kept) => {
+          const copy = bytes.slice(0, kept > 0.5 ? bytes.length : Math.floor(bytes.length * kept));
+          for (const { place, byte } of changes) if (copy.length > 0) copy[Math.min(copy.length - 1, Math.floor(place * copy.length))] = byte;
+          inspectedInTime(copy);
+        },
+      ),
       { numRuns: 1000, seed: 20240605 },
     );
   }, 120_000);

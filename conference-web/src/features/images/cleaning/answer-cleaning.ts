@@ -15,8 +15,7 @@ export interface CleaningRequest {
 
 /** What the worker answers; `uids` go with the next request. */
 export type CleaningAnswer =
-  | { id: number; cleaned: CleanedFile; uids: [string, string][] }
-  | { id: number; refusal: { fault: FileFault; message: string } };
+  { id: number; cleaned: CleanedFile; uids: [string, string][] } | { id: number; refusal: { fault: FileFault; message: string } };
 
 /** Cleans one file; a fault of any kind is an answer, so that the rest of the batch goes on. */
 export async function answerCleaning({ id, file, options, uids }: CleaningRequest): Promise<CleaningAnswer> {

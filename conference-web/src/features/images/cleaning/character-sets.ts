@@ -16,13 +16,16 @@ const LABELS: Record<string, string> = {
   '159': 'iso-2022-jp',
   '166': 'windows-874',
   '192': 'utf-8',
-  'GB18030': 'gb18030',
-  'GBK': 'gbk',
+  GB18030: 'gb18030',
+  GBK: 'gbk',
 };
 
 /** For showing what was removed only: nothing that is decoded goes into a clean file. */
 export function textDecoderFor(specificCharacterSet: string): TextDecoder {
   const names = specificCharacterSet.split('\\').map((name) => name.replace(/^ISO(_| 2022 )IR /, '').replace(/[\0 ]+$/, ''));
-  const label = names.reverse().map((name) => LABELS[name]).find(Boolean);
+  const label = names
+    .reverse()
+    .map((name) => LABELS[name])
+    .find(Boolean);
   return new TextDecoder(label ?? 'windows-1252');
 }

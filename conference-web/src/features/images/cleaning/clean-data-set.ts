@@ -52,7 +52,8 @@ function vrOf({ signed }: Carrying, element: DicomElement, { vrs }: KeptAttribut
 
 function valueOf(carrying: Carrying, element: DicomElement, attribute: KeptAttribute, vr: string, path: number[]): unknown[] | null {
   const { bytes, encoding } = carrying.dataSet;
-  if (attribute.items) return element.items ? element.items.map((item) => carried(carrying, item, path, attribute.items!)) : refused(carrying, element);
+  if (attribute.items)
+    return element.items ? element.items.map((item) => carried(carrying, item, path, attribute.items!)) : refused(carrying, element);
   if (vr === 'OW') {
     const table = bytes.subarray(element.value, element.end);
     return table.length > LONGEST_TABLE || element.pieces ? refused(carrying, element) : [copyWords(table, encoding.bigEndian).buffer];

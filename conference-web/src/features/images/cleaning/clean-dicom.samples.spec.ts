@@ -43,7 +43,18 @@ describe('the sample files', () => {
   it('are cleaned, but for those that hold no whole picture', () => {
     expect(cleaned.length).toBeGreaterThanOrEqual(83);
     // pydicom's README of its test files says of each what it holds
-    const pictures = ['CT_small', 'MR_small', 'MR_small_bigendian', 'MR_small_implicit', 'MR_small_RLE', 'image_dfl', 'JPEG2000', '693_J2KI', 'MR_small_jpeg_ls_lossless', 'SC_rgb_rle_2frame'];
+    const pictures = [
+      'CT_small',
+      'MR_small',
+      'MR_small_bigendian',
+      'MR_small_implicit',
+      'MR_small_RLE',
+      'image_dfl',
+      'JPEG2000',
+      '693_J2KI',
+      'MR_small_jpeg_ls_lossless',
+      'SC_rgb_rle_2frame',
+    ];
     const names = new Set(cleaned.map(({ sample }) => sample.name));
     expect(pictures.filter((name) => !names.has(`test_files/${name}.dcm`))).toEqual([]);
   });
@@ -105,7 +116,9 @@ describe('the sample files', () => {
       const bytes = Buffer.from(file.bytes).toString('latin1');
       const words = file.removed.map(({ was }) => was).filter((was) => /^[ -~]{6,}$/.test(was) && !/^\d+ (bytes?|items?)$/.test(was));
       const kept = new Set(file.kept.map(({ value }) => value.replaceAll(', ', '\\')));
-      return words.filter((word) => bytes.includes(word) && ![...kept].some((value) => value.includes(word)) && !STANDARD_WORDS.test(word)).map((word) => `${sample.name}: ${word}`);
+      return words
+        .filter((word) => bytes.includes(word) && ![...kept].some((value) => value.includes(word)) && !STANDARD_WORDS.test(word))
+        .map((word) => `${sample.name}: ${word}`);
     });
     expect(left).toEqual([]);
   });

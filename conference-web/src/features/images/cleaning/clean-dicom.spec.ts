@@ -50,7 +50,15 @@ describe('what is kept', () => {
   });
 
   it('is no name in an attribute that is otherwise kept', async () => {
-    const bytes = modified('test_files/CT_small.dcm', '-i', '(0018,0015)=DOE JANE', '-i', '(0018,5101)=DOE', '-m', '(0008,0008)=ORIGINAL\\PRIMARY\\DOE JANE');
+    const bytes = modified(
+      'test_files/CT_small.dcm',
+      '-i',
+      '(0018,0015)=DOE JANE',
+      '-i',
+      '(0018,5101)=DOE',
+      '-m',
+      '(0008,0008)=ORIGINAL\\PRIMARY\\DOE JANE',
+    );
     const { bytes: clean, removed } = await cleanDicom(bytes, newMap(), confirmed);
     expect(Buffer.from(clean).includes('DOE')).toBe(false);
     expect(removed).toContainEqual({ place: '(0018,0015)', name: 'Body Part Examined', action: 'removed', was: 'DOE JANE' });
@@ -108,18 +116,42 @@ describe('what is removed', () => {
   });
 });
 
+describe('what a packed picture says of itself', () => {
+  it('is removed from JPEG', async () => {
+    const sample = Buffer.from(dicomSample('test_files/SC_rgb_small_odd_jpeg.dcm'));
+    const start = sample.lastIndexOf(Buffer.from('ffd8ff', 'hex'));
+    // ITU-T T.81 B.2.4.5: a comment; the piece's length, which stands before it, grows with it
+    const comment = Buffer.from('\xff\xfe\x00\x0ePlanted Name', 'latin1');
+    const planted = Buffer.concat([sample.subarray(0, start + 2), comment, sample.subarray(start + 2)]);
+    planted.writeUInt32LE(planted.readUInt32LE(start - 4) + comment.length, start - 4);
+    const { bytes, removed } = await cleanDicom(new Uint8Array(planted), newMap(), confirmed);
+    expect(removed).toContainEqual({ place: '(7FE0,0010)', name: 'COM (comment)', action: 'removed', was: '' });
+    expect(Buffer.from(bytes).includes('Planted')).toBe(false);
+  });
+
+  it('is blanked in JPEG 2000', async () => {
+    const sample = dicomSample('test_files/JPEG2000.dcm');
+    const { bytes, removed } = await cleanDicom(sample, newMap(), confirmed);
+    expect(removed).toContainEqual({ place: '(7FE0,0010)', name: 'COM (comment)', action: 'blanked', was: '' });
+    expect([Buffer.from(sample).includes('Kakadu'), Buffer.from(bytes).includes('Kakadu')]).toEqual([true, false]);
+  });
+});
+
 describe('UIDs', () => {
   it('are new, and the same for the same in all files of one upload', async () => {
     const map = newMap();
     const slices = ['4467', '4528', '4558'].map((name) => dicomSample(`test_files/dicomdirtests/98892003/MR700/${name}`));
-    const clean = [];
+    const clean: ReturnType<typeof dumped>[] = [];
     for (const slice of slices) clean.push(dumped((await cleanDicom(slice, map, confirmed)).bytes));
     const distinct = (tag: string) => new Set(clean.flatMap((valueOf) => valueOf(tag)));
     expect([distinct('0020,000d').size, distinct('0020,000e').size, distinct('0008,0018').size]).toEqual([1, 1, 3]);
   });
 
   it('differ from upload to upload, so that nobody can find the file again by them', async () => {
-    const twice = [await cleanDicom(dicomSample('test_files/CT_small.dcm'), newMap(), confirmed), await cleanDicom(dicomSample('test_files/CT_small.dcm'), newMap(), confirmed)];
+    const twice = [
+      await cleanDicom(dicomSample('test_files/CT_small.dcm'), newMap(), confirmed),
+      await cleanDicom(dicomSample('test_files/CT_small.dcm'), newMap(), confirmed),
+    ];
     expect(new Set(twice.flatMap(({ bytes }) => dumped(bytes)('0020,000d'))).size).toBe(2);
   });
 });

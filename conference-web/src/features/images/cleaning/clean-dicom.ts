@@ -26,7 +26,7 @@ dcmjs.log.disableAll?.();
 export async function cleanDicom(bytes: Uint8Array<ArrayBuffer>, uids: UidMap, { pixelsConfirmed }: CleanOptions): Promise<CleanedFile> {
   const meta = readMeta(bytes);
   const dataSet = meta.syntax.deflated
-    ? readDataSet(await inflateDataSet(bytes.subarray(meta.end)), 0, meta.syntax)
+    ? readDataSet(inflateDataSet(bytes.subarray(meta.end)), 0, meta.syntax)
     : readDataSet(bytes, meta.end, meta.syntax);
   const sopClass = knownPicture(bytes, meta, dataSet);
   const facts = pictureFacts(dataSet);
@@ -72,7 +72,10 @@ function ownValues(dataSet: DicomDataSet, uids: UidMap, sopClass: string, confir
     else if (written.NEEDED_UIDS.includes(tag)) own[dcmjsTag(tag)] = { vr: 'UI', Value: [uids.fresh()] };
   }
   if (confirmed) own[dcmjsTag(written.BURNED_IN)] = { vr: 'CS', Value: ['NO'] };
-  own[dcmjsTag(written.METHOD_CODES)] = { vr: 'SQ', Value: (confirmed ? [written.BASIC_PROFILE, written.CLEAN_PIXELS] : [written.BASIC_PROFILE]).map(codeItem) };
+  own[dcmjsTag(written.METHOD_CODES)] = {
+    vr: 'SQ',
+    Value: (confirmed ? [written.BASIC_PROFILE, written.CLEAN_PIXELS] : [written.BASIC_PROFILE]).map(codeItem),
+  };
   return own;
 }
 
@@ -127,5 +130,12 @@ const HEAD_NAMES: ReadonlyMap<number, string> = new Map([
 
 function headFinding(bytes: Uint8Array, element: DicomElement): RemovedItem {
   const place = tagText(element.tag);
-  return { place, name: HEAD_NAMES.get(element.tag)!, action: 'replaced', was: textOf(bytes, element).replace(/[^ -~]/g, '').slice(0, 80) };
+  return {
+    place,
+    name: HEAD_NAMES.get(element.tag)!,
+    action: 'replaced',
+    was: textOf(bytes, element)
+      .replace(/[^ -~]/g, '')
+      .slice(0, 80),
+  };
 }

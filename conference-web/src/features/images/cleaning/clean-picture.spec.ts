@@ -8,7 +8,14 @@ const bytesOf = (...parts: (string | number[])[]) =>
 /** A JPEG of 8 × 8 grey pixels (ITU-T T.81 B.2), whose EXIF data say `orientation` and an artist. */
 function jpeg(orientation: number): Uint8Array {
   const entry = (tag: number, type: number, count: number, value: number[]) => [tag & 255, tag >> 8, type, 0, count, 0, 0, 0, ...value];
-  const exif = bytesOf('Exif\0\0', 'II*\0', [8, 0, 0, 0, 2, 0], entry(0x0112, 3, 1, [orientation, 0, 0, 0]), entry(0x013b, 2, 4, [68, 111, 101, 0]), [0, 0, 0, 0]);
+  const exif = bytesOf(
+    'Exif\0\0',
+    'II*\0',
+    [8, 0, 0, 0, 2, 0],
+    entry(0x0112, 3, 1, [orientation, 0, 0, 0]),
+    entry(0x013b, 2, 4, [68, 111, 101, 0]),
+    [0, 0, 0, 0],
+  );
   return bytesOf(
     [0xff, 0xd8, 0xff, 0xe1, 0, exif.length + 2],
     [...exif],

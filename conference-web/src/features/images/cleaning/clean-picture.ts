@@ -17,7 +17,10 @@ export async function cleanPicture(bytes: Uint8Array, turn: TurnPicture | null):
   if (clean.orientation === 1) return result(clean, removed);
   if (!turn) throw new FileRefusal('not-read', 'The picture lies on its side, and this browser can not turn it. Turn it upright and save it anew.');
   const turned = cleanPictureBytes(await turn(clean));
-  return result(turned, removed.map((item) => (item.place === 'EXIF Orientation' ? { ...item, action: 'applied' } : item)));
+  return result(
+    turned,
+    removed.map((item) => (item.place === 'EXIF Orientation' ? { ...item, action: 'applied' } : item)),
+  );
 }
 
 function result(clean: CleanedPicture, removed: RemovedItem[]): CleanedFile {

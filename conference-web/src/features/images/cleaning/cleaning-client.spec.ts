@@ -11,7 +11,12 @@ const film = () => new Blob([dicomSample('test_files/CT_small.dcm')]);
 function nearWorker(): CleaningWorker {
   const { port1, port2 } = new MessageChannel();
   port2.onmessage = ({ data }: MessageEvent<CleaningRequest>) => void answerCleaning(data).then((answer) => port2.postMessage(answer));
-  const worker: CleaningWorker = { postMessage: (request) => port1.postMessage(request), onmessage: null, onerror: null, terminate: () => port1.close() };
+  const worker: CleaningWorker = {
+    postMessage: (request) => port1.postMessage(request),
+    onmessage: null,
+    onerror: null,
+    terminate: () => port1.close(),
+  };
   port1.onmessage = (event: MessageEvent<CleaningAnswer>) => worker.onmessage?.(event);
   return worker;
 }
@@ -31,7 +36,11 @@ it('cleans the files of one upload with the same new UIDs', async () => {
 
 it('goes on with the rest after a file that is refused', async () => {
   const client = new CleaningClient(nearWorker);
-  const answers = await Promise.allSettled([client.clean(new Blob(['%PDF-1.7\n']), confirmed), client.clean(new Blob([]), confirmed), client.clean(film(), confirmed)]);
+  const answers = await Promise.allSettled([
+    client.clean(new Blob(['%PDF-1.7\n']), confirmed),
+    client.clean(new Blob([]), confirmed),
+    client.clean(film(), confirmed),
+  ]);
   client.close();
   expect(answers.map(({ status }) => status)).toEqual(['rejected', 'rejected', 'fulfilled']);
 });

@@ -28,7 +28,10 @@ async function cleanedOrRefused(bytes: Uint8Array<ArrayBuffer>): Promise<void> {
 
 const anySample = fc.integer({ min: 0, max: SAMPLES.length - 1 });
 // most faults are in the head and the attributes, which lie in front
-const anyPlace = fc.oneof({ weight: 3, arbitrary: fc.double({ min: 0, max: 0.1, noNaN: true }) }, { weight: 1, arbitrary: fc.double({ min: 0, max: 1, noNaN: true }) });
+const anyPlace = fc.oneof(
+  { weight: 3, arbitrary: fc.double({ min: 0, max: 0.1, noNaN: true }) },
+  { weight: 1, arbitrary: fc.double({ min: 0, max: 1, noNaN: true }) },
+);
 const anyChange = fc.record({ place: anyPlace, byte: fc.constantFrom(0x00, 0xff, 0x7f, 0x80, 0x01, 0x10, 0x53, 0xfe) });
 
 it('bears bytes that are changed anywhere', async () => {

@@ -77,7 +77,11 @@ function shown(bytes: Uint8Array, element: DicomElement, decoder: TextDecoder): 
   const vr = element.vr || dcmjs.data.DicomMetaDictionary.dictionary[tagText(element.tag)]?.vr;
   if (!vr || !TEXT_VRS.has(vr) || element.pieces) return `${length} byte${length === 1 ? '' : 's'}`;
   const text = decoder.decode(bytes.subarray(element.value, Math.min(element.end, element.value + 4 * LONGEST_SHOWN)));
-  return [...text].filter((character) => character >= ' ').join('').trim().slice(0, LONGEST_SHOWN);
+  return [...text]
+    .filter((character) => character >= ' ')
+    .join('')
+    .trim()
+    .slice(0, LONGEST_SHOWN);
 }
 
 function decoderOf({ bytes, elements }: DicomDataSet): TextDecoder {

@@ -27,19 +27,30 @@ export function cleanSamples(dataSet: DicomDataSet, syntax: TransferSyntax, fact
   const element = dataSet.elements.find(({ tag }) => tag === PIXEL_DATA);
   if (!element) throw new FileRefusal('no-picture', 'The DICOM file holds no picture.');
   if (Boolean(element.pieces) !== (syntax.packing !== 'plain'))
-    throw new FileRefusal('broken', `The DICOM file is broken: its head says ${syntax.name}, and its picture is ${element.pieces ? '' : 'not '}packed.`);
+    throw new FileRefusal(
+      'broken',
+      `The DICOM file is broken: its head says ${syntax.name}, and its picture is ${element.pieces ? '' : 'not '}packed.`,
+    );
   return syntax.packing === 'plain' ? plain(dataSet, element, facts) : packed(dataSet, element, syntax, facts);
 }
 
 function plain(dataSet: DicomDataSet, element: DicomElement, facts: PictureFacts): CleanSamples {
   const needed = Math.ceil(plainLength(facts));
   const extra = element.end - element.value - needed;
-  if (extra < 0) throw new FileRefusal('cut-off', `The DICOM file is cut off: ${needed} bytes belong to the picture, and ${element.end - element.value} are there.`);
+  if (extra < 0)
+    throw new FileRefusal(
+      'cut-off',
+      `The DICOM file is cut off: ${needed} bytes belong to the picture, and ${element.end - element.value} are there.`,
+    );
   if (dataSet.encoding.bigEndian && facts.bitsAllocated > 16)
     throw new FileRefusal('not-read', `Big-endian pictures of ${facts.bitsAllocated} bits are not read here. Export the picture as little endian.`);
   // an odd picture has one byte that makes its length even, which is swapped with its neighbour where words are
-  const samples = copyWords(dataSet.bytes.subarray(element.value, Math.min(element.end, element.value + needed + (needed % 2))), dataSet.encoding.bigEndian && element.vr !== 'OB');
-  const removed: RemovedItem[] = extra > 1 ? [{ place: '(7FE0,0010)', name: 'bytes after the picture', action: 'removed', was: `${extra} bytes` }] : [];
+  const samples = copyWords(
+    dataSet.bytes.subarray(element.value, Math.min(element.end, element.value + needed + (needed % 2))),
+    dataSet.encoding.bigEndian && element.vr !== 'OB',
+  );
+  const removed: RemovedItem[] =
+    extra > 1 ? [{ place: '(7FE0,0010)', name: 'bytes after the picture', action: 'removed', was: `${extra} bytes` }] : [];
   if (hasHiddenOverlay(dataSet)) {
     clearUnusedBits(samples, dataSet, facts);
     removed.push({ place: '(7FE0,0010)', name: 'overlay in unused bits', action: 'blanked', was: '' });
@@ -49,12 +60,20 @@ function plain(dataSet: DicomDataSet, element: DicomElement, facts: PictureFacts
 
 function packed(dataSet: DicomDataSet, element: DicomElement, syntax: TransferSyntax, facts: PictureFacts): CleanSamples {
   if (hasHiddenOverlay(dataSet))
-    throw new FileRefusal('not-read', 'The picture holds an overlay in its unused bits, which can not be removed while it is packed. Export it without compression.');
+    throw new FileRefusal(
+      'not-read',
+      'The picture holds an overlay in its unused bits, which can not be removed while it is packed. Export it without compression.',
+    );
   const frames = packedFrames(dataSet.bytes, element, facts.frames).map((frame) => cleanFrame(frame, syntax.packing, facts));
   const names = new Set(frames.flatMap(({ removed }) => removed));
   return {
     value: { vr: 'OB', Value: frames.map(({ bytes }) => evenCopy(bytes).buffer) },
-    removed: [...names].map((name) => ({ place: '(7FE0,0010)', name, action: name.startsWith('COM') && syntax.packing === 'jpeg2000' ? 'blanked' : 'removed', was: '' })),
+    removed: [...names].map((name) => ({
+      place: '(7FE0,0010)',
+      name,
+      action: name.startsWith('COM') && syntax.packing === 'jpeg2000' ? 'blanked' : 'removed',
+      was: '',
+    })),
   };
 }
 
@@ -72,7 +91,9 @@ function evenCopy(bytes: Uint8Array): Uint8Array<ArrayBuffer> {
 
 /** Overlays of old files lie in bits of the samples that are not used for the picture (PS3.3-2003 C.9.2). */
 function hasHiddenOverlay({ bytes, elements, encoding }: DicomDataSet): boolean {
-  const groups = new Set(elements.map(({ tag }) => Math.floor(tag / 0x10000)).filter((group) => group >= 0x6000 && group <= 0x60ff && !isPrivate(group * 0x10000)));
+  const groups = new Set(
+    elements.map(({ tag }) => Math.floor(tag / 0x10000)).filter((group) => group >= 0x6000 && group <= 0x60ff && !isPrivate(group * 0x10000)),
+  );
   return [...groups].some((group) => {
     const has = (element: number) => elements.find(({ tag }) => tag === group * 0x10000 + element);
     const bit = has(OVERLAY_BIT);

@@ -17,7 +17,10 @@ const run = promisify(execFile);
 
 /** What dcmtk's dcmdump finds in files, on all levels. */
 export function dcmdump(...paths: string[]): DumpedLine[][] {
-  const text = execFileSync('dcmdump', ['--quiet', '--print-all', '--load-short', '--print-filename', ...paths], { encoding: 'latin1', maxBuffer: 256 * 1024 * 1024 });
+  const text = execFileSync('dcmdump', ['--quiet', '--print-all', '--load-short', '--print-filename', ...paths], {
+    encoding: 'latin1',
+    maxBuffer: 256 * 1024 * 1024,
+  });
   const files = text.split(/^# .*dcmdump \(\d+\/\d+\).*$/m).slice(1);
   if (files.length !== paths.length) throw new Error(`dcmdump read ${files.length} of ${paths.length} files`);
   return files.map((file) => file.split('\n').flatMap(dumpedLine));
