@@ -47,7 +47,7 @@ describe('without a mouse', () => {
 
     await tabTo(page, page.getByLabel('Awaiting my rating'));
     await page.keyboard.press('Space');
-    await page.waitForURL(/awaitingMyRating/);
+    await page.waitForURL(/awaiting=true/);
     await see(page.getByRole('table', { name: 'Cases' }), 'Your rating is due');
     await page.locator('[aria-busy="true"]').waitFor({ state: 'detached' });
     // out of the box, where letters would be its own

@@ -20,7 +20,7 @@ afterEach(() => expect(visitors.faults.splice(0)).toEqual([]));
 
 const course = (page: Page) => section(page, 'History').getByLabel('Course');
 
-/** Nothing that this page writes reaches the server, until `mend`. */
+/** Nothing that is written on this page reaches the server, until `mend`. */
 async function cutOff(page: Page): Promise<{ mend: () => Promise<void> }> {
   await page.route('**/api/cases/**', (route) => (route.request().method() === 'PATCH' ? route.abort() : route.continue()));
   return { mend: () => page.unroute('**/api/cases/**') };
@@ -63,13 +63,14 @@ describe('leaving and coming back', () => {
 
   it('puts back what could not be saved before the tab was closed, and saves it', async () => {
     await surgeon.goto('/cases');
-    await beginCase(surgeon, unique('Cut off'));
+    await beginCase(surgeon, unique('No connection'));
     const tab = await surgeon.context().newPage();
     await tab.goto(surgeon.url());
-    await cutOff(tab);
+    await surgeon.context().setOffline(true);
     await course(tab).fill(SENTENCE);
     await see(tab, /^Not saved: kept here/);
     await tab.close();
+    await surgeon.context().setOffline(false);
     await surgeon.reload();
     await see(surgeon, /that had not been saved was put back/);
     await see(surgeon, /^Saved at/);

@@ -7,25 +7,34 @@ import type { Page } from 'playwright-core';
 const axeSource = readFileSync(createRequire(`${process.cwd()}/package.json`).resolve('axe-core/axe.min.js'), 'utf8');
 const folder = process.env['KERFSIDE_SCREENSHOTS'];
 
-const VIEWS = [
+interface View {
+  width: number;
+  height: number;
+  colorScheme: 'light' | 'dark';
+}
+
+// each width and each theme once
+const VIEWS: View[] = [
   { width: 1280, height: 900, colorScheme: 'light' },
-  { width: 1280, height: 900, colorScheme: 'dark' },
   { width: 390, height: 844, colorScheme: 'dark' },
+];
+const OTHER_VIEWS: View[] = [
   { width: 390, height: 844, colorScheme: 'light' },
-] as const;
+  { width: 1280, height: 900, colorScheme: 'dark' },
+];
 
 /**
  * The page as it stands, at both widths and in both themes: no serious or critical finding of axe-core, and nothing
- * wider than the window. With KERFSIDE_SCREENSHOTS set, each view is also kept as a picture in that folder.
+ * wider than the window. With KERFSIDE_SCREENSHOTS set, all four views are checked and kept as pictures in that folder.
  */
-export async function checkPage(page: Page, name: string): Promise<void> {
+export async function checkPage(page: Page, name: string, { isAlwaysDark = false } = {}): Promise<void> {
   const before = page.viewportSize();
   const findings: string[] = [];
-  for (const { width, height, colorScheme } of VIEWS) {
+  for (const { width, height, colorScheme } of folder ? [...VIEWS, ...OTHER_VIEWS] : VIEWS) {
     const view = `${name} at ${width} px, ${colorScheme}`;
     await page.setViewportSize({ width, height });
     await page.emulateMedia({ colorScheme });
-    await settle(page, colorScheme);
+    await settle(page, isAlwaysDark ? 'dark' : colorScheme);
     findings.push(...(await tooWide(page)).map((what) => `${view}: wider than the window: ${what}`));
     findings.push(...(await barriers(page)).map((what) => `${view}: ${what}`));
     if (folder) await keepPicture(page, `${name}-${width}-${colorScheme}`);
