@@ -89,7 +89,7 @@ describe('the mail queue', () => {
 
   it('knows no mail that is not there', async () => {
     expect((await test.http().post('/api/mail/999999/retry').set(world.people.admin.auth)).status).toBe(404);
-    expect((await test.http().post('/api/mail/x/retry').set(world.people.admin.auth)).status).toBe(400);
+    expect((await test.http().post('/api/mail/x/retry').set(world.people.admin.auth)).status).toBe(404);
     expect((await list('?cursor=nonsense')).status).toBe(422);
   });
 });
