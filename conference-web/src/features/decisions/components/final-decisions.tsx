@@ -64,7 +64,7 @@ function FinalText({ decision }: { decision: FinalDecision }) {
     <div className={styles.final}>
       <Facts
         facts={[
-          ['The surgeon will go on', <strong key="kind">{FINAL_DECISION_WORDS[kind]}</strong>],
+          ['What the surgeon will do', <strong key="kind">{FINAL_DECISION_WORDS[kind]}</strong>],
           ...(reason ? ([['Reason', <span key="reason" className={styles.words}>{reason}</span>]] as [string, React.ReactNode][]) : []),
           ...(kind === 'not-proceeding' ? [] : ([['Planned week', plannedWeek ? weekWords(plannedWeek) : 'Not known']] as [string, string][])),
           ['Patient informed', patientInformed === null ? 'Not known' : patientInformed ? 'Yes' : 'No'],

@@ -20,6 +20,8 @@ export function CaseHistory({ caseId }: { caseId: string }) {
     return <TableSkeleton rows={6} columns={3} />;
   }
   const versions = query.data.pages.flatMap(({ items }) => items);
+  // only its presenter and the coordinator read what was there before the release
+  const oldest = query.hasNextPage ? null : (versions.at(-1)?.version ?? null);
   return (
     <>
       <Section title="Compare two versions">
@@ -29,7 +31,7 @@ export function CaseHistory({ caseId }: { caseId: string }) {
         <ol className={styles.groups}>
           {groupVersions(versions).map((group) => (
             <li key={group.first}>
-              <Group caseId={caseId} group={group} />
+              <Group caseId={caseId} group={group} oldest={oldest} />
             </li>
           ))}
         </ol>
@@ -44,12 +46,13 @@ const span = ({ startedAt, endedAt }: VersionGroup) =>
 
 const numbers = ({ first, last }: VersionGroup) => (first === last ? `version ${last}` : `versions ${first} to ${last}`);
 
-/** One sitting; its differences are fetched when it is opened. */
-function Group({ caseId, group }: { caseId: string; group: VersionGroup }) {
+/** One sitting; its differences are fetched when it is opened. The oldest version differs from nothing. */
+function Group({ caseId, group, oldest }: { caseId: string; group: VersionGroup; oldest: number | null }) {
   const [isOpen, setOpen] = useState(false);
-  // the first version is the beginning and differs from nothing
-  const since = Math.max(1, group.first - 1);
-  const what = SECTIONS.filter((section) => (group.sections as string[]).includes(section)).map((section) => SECTION_WORDS[section]).join(', ') || 'Begun';
+  const since = group.first === oldest ? oldest : group.first - 1;
+  const isBeginning = group.last === since;
+  const sections = SECTIONS.filter((section) => (group.sections as string[]).includes(section)).map((section) => SECTION_WORDS[section]).join(', ');
+  const what = isBeginning ? (since === 1 ? 'Begun' : 'As released') : sections || 'Begun';
   const head = (
     <>
       <strong>{what}</strong>
@@ -58,7 +61,7 @@ function Group({ caseId, group }: { caseId: string; group: VersionGroup }) {
       </span>
     </>
   );
-  if (group.last === since) return <div className={styles.begun}>{head}</div>;
+  if (isBeginning) return <div className={styles.begun}>{head}</div>;
   return (
     <details onToggle={(event) => setOpen(event.currentTarget.open)}>
       <summary>{head}</summary>
