@@ -66,6 +66,8 @@ describe('leaving and coming back', () => {
     await beginCase(surgeon, unique('No connection'));
     const tab = await surgeon.context().newPage();
     await tab.goto(surgeon.url());
+    // the form has come before the line is cut
+    await course(tab).waitFor();
     await surgeon.context().setOffline(true);
     await course(tab).fill(SENTENCE);
     await see(tab, /^Not saved: kept here/);
